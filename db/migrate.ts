@@ -1,4 +1,4 @@
-import { existsSync, mkdirSync } from "node:fs";
+import { mkdirSync } from "node:fs";
 import { dirname, join } from "node:path";
 import Database from "better-sqlite3";
 import { readMigrationFiles } from "drizzle-orm/migrator";
@@ -10,8 +10,20 @@ const lockWaitMs = 60_000;
 
 type Broken = { table: string; rowid: number | null; parent: string };
 
+/** Brings a database file up to the schema of this program and answers how many migrations it applied. */
+export function migrateDb(file: string, migrationsFolder: string = shippedMigrations): number {
+  mkdirSync(dirname(file), { recursive: true });
+  const client = new Database(file, { timeout: lockWaitMs });
+  try {
+    client.pragma("journal_mode = WAL");
+    return migrateClient(client, migrationsFolder);
+  } finally {
+    client.close();
+  }
+}
+
 /**
- * Brings the database file up to the schema of this program and answers how many migrations it applied.
+ * The same on an open connection; foreign keys are on afterwards.
  *
  * Trap: a table rebuild drops the old table, and with foreign keys on that deletes every row that cascades from it. The pragma that the
  * generated SQL carries does nothing inside a transaction, so it is set here, before the transaction opens. The check afterwards stands
@@ -20,16 +32,12 @@ type Broken = { table: string; rowid: number | null; parent: string };
  * The exclusive transaction is the lock: of two processes that start at once, the second waits, then finds nothing left to do.
  * The table of applied migrations is drizzle's own, so that its tools still read it.
  */
-export function migrateDb(file: string, migrationsFolder: string = shippedMigrations): number {
-  if (!existsSync(join(migrationsFolder, "meta", "_journal.json"))) throw new Error(`No migrations stand in ${migrationsFolder}.`);
-  mkdirSync(dirname(file), { recursive: true });
-  const db = new Database(file, { timeout: lockWaitMs });
+export function migrateClient(client: Database.Database, migrationsFolder: string = shippedMigrations): number {
+  client.pragma("foreign_keys = OFF");
   try {
-    db.pragma("journal_mode = WAL");
-    db.pragma("foreign_keys = OFF");
-    return db.transaction(() => applyMissing(db, migrationsFolder)).exclusive();
+    return client.transaction(() => applyMissing(client, migrationsFolder)).exclusive();
   } finally {
-    db.close();
+    client.pragma("foreign_keys = ON");
   }
 }
 
@@ -60,5 +68,7 @@ function applyMissing(db: Database.Database, migrationsFolder: string): number {
 function refuseOrphans(broken: Broken[]): void {
   const first = broken[0];
   if (first)
-    throw new Error(`A migration would leave ${broken.length} row(s) without their parent (${first.table} → ${first.parent}); nothing was changed.`);
+    throw new Error(
+      `A migration would leave ${broken.length} row(s) without their parent (${first.table} → ${first.parent}); nothing was changed.`,
+    );
 }

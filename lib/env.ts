@@ -7,7 +7,12 @@ const filePath = (fallback: string) => optional(z.string().default(fallback)).tr
 const flag = optional(z.enum(["0", "1"], "must be 0 or 1").default("0")).transform((value) => value === "1");
 
 /** The UTC day is checked as a real one: 2026-02-30 is refused. */
-const day = z.string().refine((text) => /^\d{4}-\d{2}-\d{2}$/.test(text) && !Number.isNaN(Date.parse(text)) && new Date(text).toISOString().startsWith(text), "must be a day as YYYY-MM-DD");
+const day = z
+  .string()
+  .refine(
+    (text) => /^\d{4}-\d{2}-\d{2}$/.test(text) && !Number.isNaN(Date.parse(text)) && new Date(text).toISOString().startsWith(text),
+    "must be a day as YYYY-MM-DD",
+  );
 
 const Settings = z.object({
   DATABASE_FILE: filePath("data/greenarc.db"),
@@ -22,7 +27,7 @@ const Settings = z.object({
   S3_BUCKET: optional(z.string().min(3).optional()),
   S3_ACCESS_KEY_ID: optional(z.string().optional()),
   S3_SECRET_ACCESS_KEY: optional(z.string().optional()),
-  DEMO_PASSWORD: optional(z.string().min(8, "must be at least 8 characters").default("cowl-open-68")),
+  DEMO_PASSWORD: optional(z.string().min(8, "must be at least 8 characters").optional()),
   DEMO_DATE: optional(day.optional()),
   /** 1 shows the demo sign-ins and the word demo; only `npm run demo` and `npm run dev` set it. */
   GREENARC_DEMO: flag,

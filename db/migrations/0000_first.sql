@@ -10,7 +10,7 @@ CREATE TABLE `audit_events` (
 	`after` text,
 	`previous_digest` text NOT NULL,
 	`digest` text NOT NULL
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `audit_events_sequence` ON `audit_events` (`team_id`,`sequence`);--> statement-breakpoint
 CREATE TABLE `card_revisions` (
@@ -44,7 +44,7 @@ CREATE TABLE `card_revisions` (
 	CONSTRAINT "card_revisions_content" CHECK(json_valid("card_revisions"."content")),
 	CONSTRAINT "card_revisions_frozen" CHECK("card_revisions"."state" not in ('released', 'superseded', 'withdrawn') or ("card_revisions"."document" is not null and "card_revisions"."digest" is not null and "card_revisions"."code" is not null)),
 	CONSTRAINT "card_revisions_not_own" CHECK("card_revisions"."released_by" is null or "card_revisions"."released_by" <> "card_revisions"."author_id")
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `card_revisions_letter` ON `card_revisions` (`card_id`,`letter`);--> statement-breakpoint
 CREATE UNIQUE INDEX `card_revisions_one_open` ON `card_revisions` (`card_id`) WHERE "card_revisions"."state" in ('draft', 'in review');--> statement-breakpoint
@@ -59,7 +59,7 @@ CREATE TABLE `cards` (
 	`created_by` text NOT NULL,
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`created_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `cards_number` ON `cards` (`programme_id`,`number`);--> statement-breakpoint
 CREATE TABLE `prints` (
@@ -72,7 +72,7 @@ CREATE TABLE `prints` (
 	`printed_at` text NOT NULL,
 	FOREIGN KEY (`revision_id`) REFERENCES `card_revisions`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`printed_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `prints_revision` ON `prints` (`revision_id`,`printed_at`);--> statement-breakpoint
 CREATE TABLE `review_comments` (
@@ -85,7 +85,7 @@ CREATE TABLE `review_comments` (
 	`created_at` text NOT NULL,
 	FOREIGN KEY (`revision_id`) REFERENCES `card_revisions`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`author_id`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `review_comments_revision` ON `review_comments` (`revision_id`,`created_at`);--> statement-breakpoint
 CREATE TABLE `signatures` (
@@ -99,7 +99,7 @@ CREATE TABLE `signatures` (
 	`role` text NOT NULL,
 	`signed_at` text NOT NULL,
 	FOREIGN KEY (`signed_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `signatures_subject` ON `signatures` (`subject`);--> statement-breakpoint
 CREATE TABLE `submissions` (
@@ -109,7 +109,7 @@ CREATE TABLE `submissions` (
 	`answer` text NOT NULL,
 	`created_at` text NOT NULL,
 	PRIMARY KEY(`user_id`, `key`)
-);
+) STRICT;
 --> statement-breakpoint
 CREATE TABLE `aircraft` (
 	`id` text PRIMARY KEY NOT NULL,
@@ -119,7 +119,7 @@ CREATE TABLE `aircraft` (
 	`data` text NOT NULL,
 	FOREIGN KEY (`team_id`) REFERENCES `teams`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "aircraft_data" CHECK(json_valid("aircraft"."data"))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `aircraft_registration` ON `aircraft` (`team_id`,`registration`);--> statement-breakpoint
 CREATE TABLE `calibrations` (
@@ -145,7 +145,7 @@ CREATE TABLE `calibrations` (
 	FOREIGN KEY (`created_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "calibrations_range" CHECK("calibrations"."low" < "calibrations"."high"),
 	CONSTRAINT "calibrations_shape" CHECK(("calibrations"."kind" = 'linear' and "calibrations"."gain" is not null and "calibrations"."offset" is not null) or ("calibrations"."kind" = 'points' and "calibrations"."points" is not null))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `calibrations_one_in_use` ON `calibrations` (`instrument_id`) WHERE "calibrations"."superseded_at" is null;--> statement-breakpoint
 CREATE TABLE `configurations` (
@@ -165,7 +165,7 @@ CREATE TABLE `configurations` (
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`signed_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "configurations_signed" CHECK(("configurations"."signed_by" is null) = ("configurations"."signed_at" is null))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `configurations_number` ON `configurations` (`programme_id`,`number`);--> statement-breakpoint
 CREATE UNIQUE INDEX `configurations_one_current` ON `configurations` (`programme_id`) WHERE "configurations"."is_current" = 1;--> statement-breakpoint
@@ -176,7 +176,7 @@ CREATE TABLE `hazards` (
 	`data` text NOT NULL,
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "hazards_data" CHECK(json_valid("hazards"."data"))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `hazards_code` ON `hazards` (`programme_id`,`code`);--> statement-breakpoint
 CREATE TABLE `instruments` (
@@ -197,7 +197,7 @@ CREATE TABLE `instruments` (
 	CONSTRAINT "instruments_range" CHECK("instruments"."low" < "instruments"."high"),
 	CONSTRAINT "instruments_readable" CHECK("instruments"."readable" > 0 and "instruments"."mark_spacing" > 0),
 	CONSTRAINT "instruments_shown_on" CHECK("instruments"."shown_on" in ('panel', 'repeater', 'recorder', 'hand held'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `instruments_name` ON `instruments` (`programme_id`,`name`);--> statement-breakpoint
 CREATE TABLE `limits` (
@@ -220,7 +220,7 @@ CREATE TABLE `limits` (
 	CONSTRAINT "limits_applies_when" CHECK("limits"."applies_when" in ('always', 'at power', 'idle', 'take-off', 'full power', 'cold start')),
 	CONSTRAINT "limits_statistic" CHECK("limits"."statistic" in ('instant', 'sustained', 'rate', 'spread', 'peak to peak', 'change from baseline')),
 	CONSTRAINT "limits_for" CHECK("limits"."for_s" >= 0)
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `limits_one_a_layer` ON `limits` (`programme_id`,`parameter`,`side`,`layer`,`applies_when`,`statistic`);--> statement-breakpoint
 CREATE TABLE `objectives` (
@@ -232,7 +232,7 @@ CREATE TABLE `objectives` (
 	`priority` text NOT NULL,
 	`requirement` text DEFAULT '' NOT NULL,
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `objectives_code` ON `objectives` (`programme_id`,`code`);--> statement-breakpoint
 CREATE TABLE `parameters` (
@@ -251,7 +251,7 @@ CREATE TABLE `parameters` (
 	`position` integer NOT NULL,
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "parameters_hot_day_rule" CHECK("parameters"."hot_day_rule" in ('plus-one', 'barrel', 'ratio', 'none'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `parameters_code` ON `parameters` (`programme_id`,`code`);--> statement-breakpoint
 CREATE TABLE `programmes` (
@@ -267,7 +267,7 @@ CREATE TABLE `programmes` (
 	FOREIGN KEY (`aircraft_id`) REFERENCES `aircraft`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "programmes_basis" CHECK("programmes"."hot_day_basis" is null or "programmes"."hot_day_basis" in ('us', 'metric')),
 	CONSTRAINT "programmes_settings" CHECK(json_valid("programmes"."settings"))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `programmes_team` ON `programmes` (`team_id`);--> statement-breakpoint
 CREATE TABLE `step_decisions` (
@@ -294,7 +294,7 @@ CREATE TABLE `step_decisions` (
 	FOREIGN KEY (`proposed_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`countersigned_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "step_decisions_decision" CHECK("step_decisions"."decision" in ('clear to next step', 'smaller step', 'hold'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `step_decisions_programme` ON `step_decisions` (`programme_id`,`position`);--> statement-breakpoint
 CREATE TABLE `test_points` (
@@ -309,7 +309,7 @@ CREATE TABLE `test_points` (
 	`created_at` text NOT NULL,
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "test_points_content" CHECK(json_valid("test_points"."content"))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `test_points_revision` ON `test_points` (`programme_id`,`code`,`revision`);--> statement-breakpoint
 CREATE UNIQUE INDEX `test_points_one_newest` ON `test_points` (`programme_id`,`code`) WHERE "test_points"."is_newest" = 1;--> statement-breakpoint
@@ -325,7 +325,7 @@ CREATE TABLE `check_reports` (
 	FOREIGN KEY (`sortie_id`) REFERENCES `sorties`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`revision_id`) REFERENCES `card_revisions`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "check_reports_report" CHECK(json_valid("check_reports"."report"))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `check_reports_version` ON `check_reports` (`sortie_id`,`revision_id`,`version`);--> statement-breakpoint
 CREATE TABLE `debriefs` (
@@ -341,7 +341,7 @@ CREATE TABLE `debriefs` (
 	FOREIGN KEY (`submitted_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`reviewed_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "debriefs_content" CHECK(json_valid("debriefs"."content"))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `debriefs_one_a_sortie` ON `debriefs` (`sortie_id`);--> statement-breakpoint
 CREATE TABLE `sortie_cards` (
@@ -358,7 +358,7 @@ CREATE TABLE `sortie_cards` (
 	FOREIGN KEY (`revision_id`) REFERENCES `card_revisions`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`answered_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "sortie_cards_answer" CHECK(("sortie_cards"."answer" is null) = ("sortie_cards"."answered_digest" is null))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `sortie_cards_once` ON `sortie_cards` (`sortie_id`,`revision_id`);--> statement-breakpoint
 CREATE INDEX `sortie_cards_revision` ON `sortie_cards` (`revision_id`);--> statement-breakpoint
@@ -373,7 +373,7 @@ CREATE TABLE `sortie_crew` (
 	FOREIGN KEY (`sortie_id`) REFERENCES `sorties`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`user_id`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "sortie_crew_mass" CHECK("sortie_crew"."mass_kg" between 30 and 200)
-);
+) STRICT;
 --> statement-breakpoint
 CREATE TABLE `sorties` (
 	`id` text PRIMARY KEY NOT NULL,
@@ -396,7 +396,7 @@ CREATE TABLE `sorties` (
 	FOREIGN KEY (`briefed_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "sorties_kind" CHECK("sorties"."kind" in ('ground run', 'taxi', 'flight', 'inspection')),
 	CONSTRAINT "sorties_state" CHECK("sorties"."state" in ('planned', 'briefed', 'flown', 'debriefed', 'closed'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `sorties_number` ON `sorties` (`programme_id`,`number`);--> statement-breakpoint
 CREATE INDEX `sorties_planned` ON `sorties` (`programme_id`,`planned_on`);--> statement-breakpoint
@@ -422,7 +422,7 @@ CREATE TABLE `squawks` (
 	CONSTRAINT "squawks_severity" CHECK("squawks"."severity" in ('grounding', 'before next test', 'monitor')),
 	CONSTRAINT "squawks_state" CHECK("squawks"."state" in ('open', 'assessed', 'dispositioned', 'verified', 'closed')),
 	CONSTRAINT "squawks_disposition" CHECK("squawks"."disposition" is null or "squawks"."disposition" in ('rectified', 'no fault found', 'deferred with limit', 'accepted as is'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `squawks_number` ON `squawks` (`programme_id`,`number`);--> statement-breakpoint
 CREATE INDEX `squawks_open` ON `squawks` (`programme_id`,`state`,`severity`);--> statement-breakpoint
@@ -432,7 +432,7 @@ CREATE TABLE `member_roles` (
 	`role` text NOT NULL,
 	PRIMARY KEY(`team_id`, `user_id`, `role`),
 	CONSTRAINT "member_roles_role" CHECK("member_roles"."role" in ('admin', 'engineer', 'reviewer', 'pilot', 'mechanic', 'observer'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE TABLE `memberships` (
 	`team_id` text NOT NULL,
@@ -443,7 +443,7 @@ CREATE TABLE `memberships` (
 	FOREIGN KEY (`team_id`) REFERENCES `teams`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`user_id`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	CONSTRAINT "memberships_risk" CHECK("memberships"."residual_risk" in ('Eliminated', 'Low', 'Medium', 'Serious', 'High'))
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `memberships_user` ON `memberships` (`user_id`);--> statement-breakpoint
 CREATE TABLE `sessions` (
@@ -456,20 +456,20 @@ CREATE TABLE `sessions` (
 	`user_agent` text DEFAULT '' NOT NULL,
 	FOREIGN KEY (`user_id`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`team_id`) REFERENCES `teams`(`id`) ON UPDATE no action ON DELETE no action
-);
+) STRICT;
 --> statement-breakpoint
 CREATE INDEX `sessions_user` ON `sessions` (`user_id`,`ended_at`);--> statement-breakpoint
 CREATE TABLE `settings` (
 	`key` text PRIMARY KEY NOT NULL,
 	`value` text NOT NULL,
 	`version` integer DEFAULT 1 NOT NULL
-);
+) STRICT;
 --> statement-breakpoint
 CREATE TABLE `teams` (
 	`id` text PRIMARY KEY NOT NULL,
 	`name` text NOT NULL,
 	`created_at` text NOT NULL
-);
+) STRICT;
 --> statement-breakpoint
 CREATE TABLE `users` (
 	`id` text PRIMARY KEY NOT NULL,
@@ -477,6 +477,6 @@ CREATE TABLE `users` (
 	`name` text NOT NULL,
 	`password_hash` text NOT NULL,
 	`created_at` text NOT NULL
-);
+) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `users_email` ON `users` (`email`);

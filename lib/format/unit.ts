@@ -1,0 +1,48 @@
+import type { Band, Quantity } from "@/lib/testcards/card";
+import type { Unit } from "@/lib/testcards/units";
+import { decimalsOf, formatNumber, ownDecimals, THIN_SPACE } from "./number";
+
+const PRINTED: Partial<Record<Unit, string>> = {
+  degC: "°C",
+  degF: "°F",
+  degR: "°R",
+  deg: "°",
+  "degC/min": "°C/min",
+  "degF/min": "°F/min",
+  USgal: "US gal",
+  impgal: "imp gal",
+  "USgal/h": "US gal/h",
+  m3: "m³",
+  "m3/s": "m³/s",
+  "1": "",
+};
+
+/** A unit as the trade prints it. */
+export function unitLabel(unit: Unit): string {
+  return PRINTED[unit] ?? unit;
+}
+
+/** Puts a unit behind a figure; an angle's degree sign stands close to it. */
+export function withUnit(figure: string, unit: Unit | null): string {
+  const label = unit === null ? "" : unitLabel(unit);
+  if (label === "") return figure;
+  return unit === "deg" ? `${figure}${label}` : `${figure}${THIN_SPACE}${label}`;
+}
+
+export function formatQuantity(quantity: Quantity, decimals = ownDecimals(quantity.value)): string {
+  return withUnit(formatNumber(quantity.value, decimals), quantity.unit);
+}
+
+/** A value on a gauge, at the decimals that its readable step needs. */
+export function formatOnGauge(value: number, instrument: { unit: Unit; readable: number }): string {
+  return withUnit(formatNumber(value, decimalsOf(instrument.readable)), instrument.unit);
+}
+
+/** "75 to 98 °C", "98 °C or less", "55 °C or more". */
+export function formatBand(band: Band, decimals?: number): string {
+  const figure = (value: number) => formatNumber(value, decimals ?? ownDecimals(value));
+  if (band.low !== null && band.high !== null) return withUnit(`${figure(band.low)} to ${figure(band.high)}`, band.unit);
+  if (band.high !== null) return `${withUnit(figure(band.high), band.unit)} or less`;
+  if (band.low !== null) return `${withUnit(figure(band.low), band.unit)} or more`;
+  return "—";
+}

@@ -21,6 +21,7 @@ CREATE TABLE `card_revisions` (
 	`content` text NOT NULL,
 	`version` integer DEFAULT 1 NOT NULL,
 	`author_id` text NOT NULL,
+	`edited_by` text DEFAULT '[]' NOT NULL,
 	`created_at` text NOT NULL,
 	`updated_at` text NOT NULL,
 	`submitted_at` text,
@@ -278,6 +279,7 @@ CREATE TABLE `step_decisions` (
 	`series` text,
 	`level` real,
 	`measured` real,
+	`expanded_uncertainty` real,
 	`predicted` text,
 	`computed` text NOT NULL,
 	`decision` text NOT NULL,
@@ -344,6 +346,24 @@ CREATE TABLE `debriefs` (
 ) STRICT;
 --> statement-breakpoint
 CREATE UNIQUE INDEX `debriefs_one_a_sortie` ON `debriefs` (`sortie_id`);--> statement-breakpoint
+CREATE TABLE `point_dispositions` (
+	`id` text PRIMARY KEY NOT NULL,
+	`sortie_id` text NOT NULL,
+	`revision_id` text NOT NULL,
+	`point_id` text NOT NULL,
+	`disposition` text NOT NULL,
+	`why` text DEFAULT '' NOT NULL,
+	`decided_by` text NOT NULL,
+	`decided_at` text NOT NULL,
+	`superseded_at` text,
+	FOREIGN KEY (`sortie_id`) REFERENCES `sorties`(`id`) ON UPDATE no action ON DELETE no action,
+	FOREIGN KEY (`revision_id`) REFERENCES `card_revisions`(`id`) ON UPDATE no action ON DELETE no action,
+	FOREIGN KEY (`decided_by`) REFERENCES `users`(`id`) ON UPDATE no action ON DELETE no action,
+	CONSTRAINT "point_dispositions_disposition" CHECK("point_dispositions"."disposition" in ('accept', 'repeat', 'void')),
+	CONSTRAINT "point_dispositions_why" CHECK("point_dispositions"."disposition" = 'accept' or length(trim("point_dispositions"."why")) > 0)
+) STRICT;
+--> statement-breakpoint
+CREATE UNIQUE INDEX `point_dispositions_one_in_force` ON `point_dispositions` (`sortie_id`,`revision_id`,`point_id`) WHERE "point_dispositions"."superseded_at" is null;--> statement-breakpoint
 CREATE TABLE `sortie_cards` (
 	`sortie_id` text NOT NULL,
 	`position` integer NOT NULL,

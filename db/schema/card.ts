@@ -11,10 +11,14 @@ export const cards = sqliteTable(
   "cards",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     number: text("number").notNull(), // "07"
     createdAt: instant("created_at").notNull(),
-    createdBy: text("created_by").notNull().references(() => users.id),
+    createdBy: text("created_by")
+      .notNull()
+      .references(() => users.id),
   },
   (t) => [uniqueIndex("cards_number").on(t.programmeId, t.number)],
 );
@@ -24,12 +28,17 @@ export const cardRevisions = sqliteTable(
   "card_revisions",
   {
     id: id(),
-    cardId: text("card_id").notNull().references(() => cards.id),
+    cardId: text("card_id")
+      .notNull()
+      .references(() => cards.id),
     letter: text("letter").notNull(),
     state: text("state", { enum: CARD_STATES }).notNull(),
     content: text("content", { mode: "json" }).$type<CardContent>().notNull(),
     version: integer("version").notNull().default(1), // every save sends the one it saw
-    authorId: text("author_id").notNull().references(() => users.id),
+    authorId: text("author_id")
+      .notNull()
+      .references(() => users.id),
+    editedBy: text("edited_by", { mode: "json" }).$type<string[]>().notNull().default([]), // later hands: none of them may release it
     createdAt: instant("created_at").notNull(),
     updatedAt: instant("updated_at").notNull(),
     submittedAt: instant("submitted_at"),
@@ -53,7 +62,10 @@ export const cardRevisions = sqliteTable(
     uniqueIndex("card_revisions_code").on(t.code),
     oneOf("card_revisions_state", t.state, CARD_STATES),
     isJson("card_revisions_content", t.content),
-    check("card_revisions_frozen", sql`${t.state} not in ('released', 'superseded', 'withdrawn') or (${t.document} is not null and ${t.digest} is not null and ${t.code} is not null)`),
+    check(
+      "card_revisions_frozen",
+      sql`${t.state} not in ('released', 'superseded', 'withdrawn') or (${t.document} is not null and ${t.digest} is not null and ${t.code} is not null)`,
+    ),
     check("card_revisions_not_own", sql`${t.releasedBy} is null or ${t.releasedBy} <> ${t.authorId}`),
   ],
 );
@@ -62,9 +74,13 @@ export const reviewComments = sqliteTable(
   "review_comments",
   {
     id: id(),
-    revisionId: text("revision_id").notNull().references(() => cardRevisions.id),
+    revisionId: text("revision_id")
+      .notNull()
+      .references(() => cardRevisions.id),
     pointId: text("point_id"),
-    authorId: text("author_id").notNull().references(() => users.id),
+    authorId: text("author_id")
+      .notNull()
+      .references(() => users.id),
     text: text("text").notNull(),
     isReturn: integer("is_return", { mode: "boolean" }).notNull().default(false), // sent with "return to draft"
     createdAt: instant("created_at").notNull(),
@@ -81,7 +97,9 @@ export const signatures = sqliteTable(
     subject: text("subject").notNull(), // "card-revision/<id>", "sortie-card/<sortie>/<revision>"
     meaning: text("meaning", { enum: ["released", "accepted", "declined", "signed configuration", "countersigned"] }).notNull(),
     digest: text("digest").notNull(),
-    signedBy: text("signed_by").notNull().references(() => users.id),
+    signedBy: text("signed_by")
+      .notNull()
+      .references(() => users.id),
     name: text("name").notNull(),
     role: text("role").notNull(),
     signedAt: instant("signed_at").notNull(),
@@ -93,11 +111,15 @@ export const prints = sqliteTable(
   "prints",
   {
     id: id(),
-    revisionId: text("revision_id").notNull().references(() => cardRevisions.id),
+    revisionId: text("revision_id")
+      .notNull()
+      .references(() => cardRevisions.id),
     paper: text("paper").notNull(),
     state: text("state", { enum: CARD_STATES }).notNull(),
     digest: text("digest").notNull(),
-    printedBy: text("printed_by").notNull().references(() => users.id),
+    printedBy: text("printed_by")
+      .notNull()
+      .references(() => users.id),
     printedAt: instant("printed_at").notNull(),
   },
   (t) => [index("prints_revision").on(t.revisionId, t.printedAt)],

@@ -1,6 +1,6 @@
 import { sql } from "drizzle-orm";
-import { check, text } from "drizzle-orm/sqlite-core";
 import type { SQLiteColumn } from "drizzle-orm/sqlite-core";
+import { check, text } from "drizzle-orm/sqlite-core";
 
 /** UUIDv7, minted by the caller. */
 export const id = () => text("id").primaryKey();

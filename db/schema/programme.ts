@@ -25,7 +25,9 @@ export const aircraft = sqliteTable(
   "aircraft",
   {
     id: id(),
-    teamId: text("team_id").notNull().references(() => teams.id),
+    teamId: text("team_id")
+      .notNull()
+      .references(() => teams.id),
     registration: text("registration").notNull(),
     type: text("type").notNull(),
     data: text("data", { mode: "json" }).$type<Aircraft>().notNull(),
@@ -37,15 +39,23 @@ export const programmes = sqliteTable(
   "programmes",
   {
     id: id(),
-    teamId: text("team_id").notNull().references(() => teams.id),
-    aircraftId: text("aircraft_id").notNull().references(() => aircraft.id),
+    teamId: text("team_id")
+      .notNull()
+      .references(() => teams.id),
+    aircraftId: text("aircraft_id")
+      .notNull()
+      .references(() => aircraft.id),
     name: text("name").notNull(),
     summary: text("summary").notNull().default(""),
     hotDayBasis: text("hot_day_basis", { enum: HOT_DAY_BASES }),
     settings: text("settings", { mode: "json" }).$type<ProgrammeSettings>().notNull(),
     createdAt: instant("created_at").notNull(),
   },
-  (t) => [index("programmes_team").on(t.teamId), oneOfOrNull("programmes_basis", t.hotDayBasis, HOT_DAY_BASES), isJson("programmes_settings", t.settings)],
+  (t) => [
+    index("programmes_team").on(t.teamId),
+    oneOfOrNull("programmes_basis", t.hotDayBasis, HOT_DAY_BASES),
+    isJson("programmes_settings", t.settings),
+  ],
 );
 
 /** What is fitted. A change is a new row; one is current; signed by a mechanic. */
@@ -53,7 +63,9 @@ export const configurations = sqliteTable(
   "configurations",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     number: text("number").notNull(),
     fitted: text("fitted").notNull(),
     details: text("details", { mode: "json" }).$type<{ label: string; value: string }[]>().notNull(),
@@ -77,7 +89,9 @@ export const parameters = sqliteTable(
   "parameters",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     code: text("code").notNull(),
     name: text("name").notNull(),
     shortName: text("short_name").notNull(),
@@ -97,7 +111,9 @@ export const instruments = sqliteTable(
   "instruments",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     parameter: text("parameter").notNull(), // its code
     name: text("name").notNull(),
     gaugeName: text("gauge_name").notNull(),
@@ -123,7 +139,9 @@ export const calibrations = sqliteTable(
   "calibrations",
   {
     id: id(),
-    instrumentId: text("instrument_id").notNull().references(() => instruments.id),
+    instrumentId: text("instrument_id")
+      .notNull()
+      .references(() => instruments.id),
     kind: text("kind", { enum: ["linear", "points"] }).notNull(),
     gain: real("gain"),
     offset: real("offset"),
@@ -144,7 +162,10 @@ export const calibrations = sqliteTable(
   (t) => [
     uniqueIndex("calibrations_one_in_use").on(t.instrumentId).where(sql`${t.supersededAt} is null`),
     check("calibrations_range", sql`${t.low} < ${t.high}`),
-    check("calibrations_shape", sql`(${t.kind} = 'linear' and ${t.gain} is not null and ${t.offset} is not null) or (${t.kind} = 'points' and ${t.points} is not null)`),
+    check(
+      "calibrations_shape",
+      sql`(${t.kind} = 'linear' and ${t.gain} is not null and ${t.offset} is not null) or (${t.kind} = 'points' and ${t.points} is not null)`,
+    ),
   ],
 );
 
@@ -152,7 +173,9 @@ export const limits = sqliteTable(
   "limits",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     parameter: text("parameter").notNull(),
     side: text("side", { enum: SIDES }).notNull(),
     layer: text("layer", { enum: LIMIT_LAYERS }).notNull(),
@@ -179,7 +202,9 @@ export const objectives = sqliteTable(
   "objectives",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     code: text("code").notNull(),
     question: text("question").notNull(),
     success: text("success").notNull(),
@@ -193,7 +218,9 @@ export const hazards = sqliteTable(
   "hazards",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     code: text("code").notNull(),
     data: text("data", { mode: "json" }).$type<Hazard>().notNull(),
   },
@@ -205,7 +232,9 @@ export const testPoints = sqliteTable(
   "test_points",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     code: text("code").notNull(),
     revision: integer("revision").notNull(),
     title: text("title").notNull(),
@@ -226,12 +255,15 @@ export const stepDecisions = sqliteTable(
   "step_decisions",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     testPointCode: text("test_point_code").notNull(),
     step: text("step").notNull(), // "T13 at 55 %", "T09 OPEN"
     series: text("series"),
     level: real("level"),
     measured: real("measured"),
+    expandedUncertainty: real("expanded_uncertainty"), // U of the measured value, in its unit
     predicted: text("predicted", { mode: "json" }).$type<{ value: number; low: number; high: number } | null>(),
     computed: text("computed", { enum: ["clear to next step", "smaller step", "hold"] }).notNull(),
     decision: text("decision", { enum: ["clear to next step", "smaller step", "hold"] }).notNull(),
@@ -245,5 +277,8 @@ export const stepDecisions = sqliteTable(
     position: integer("position").notNull(),
     createdAt: instant("created_at").notNull(),
   },
-  (t) => [index("step_decisions_programme").on(t.programmeId, t.position), oneOf("step_decisions_decision", t.decision, ["clear to next step", "smaller step", "hold"])],
+  (t) => [
+    index("step_decisions_programme").on(t.programmeId, t.position),
+    oneOf("step_decisions_decision", t.decision, ["clear to next step", "smaller step", "hold"]),
+  ],
 );

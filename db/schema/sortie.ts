@@ -1,7 +1,14 @@
 import { sql } from "drizzle-orm";
 import { check, index, integer, primaryKey, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
 import type { CheckReport, Debrief } from "../../lib/testcards/debrief-types";
-import { SORTIE_KINDS, SORTIE_STATES, SQUAWK_DISPOSITIONS, SQUAWK_SEVERITIES, SQUAWK_STATES } from "../../lib/testcards/words";
+import {
+  DISPOSITIONS,
+  SORTIE_KINDS,
+  SORTIE_STATES,
+  SQUAWK_DISPOSITIONS,
+  SQUAWK_SEVERITIES,
+  SQUAWK_STATES,
+} from "../../lib/testcards/words";
 import { cardRevisions } from "./card";
 import { id, instant, isJson, oneOf, oneOfOrNull } from "./columns";
 import { configurations, programmes } from "./programme";
@@ -18,7 +25,9 @@ export const sorties = sqliteTable(
   "sorties",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     number: integer("number").notNull(),
     kind: text("kind", { enum: SORTIE_KINDS }).notNull(),
     state: text("state", { enum: SORTIE_STATES }).notNull(),
@@ -26,7 +35,9 @@ export const sorties = sqliteTable(
     configurationId: text("configuration_id").references(() => configurations.id),
     settings: text("settings", { mode: "json" }).$type<SortieSettings>().notNull(),
     version: integer("version").notNull().default(1),
-    plannedBy: text("planned_by").notNull().references(() => users.id),
+    plannedBy: text("planned_by")
+      .notNull()
+      .references(() => users.id),
     createdAt: instant("created_at").notNull(),
     briefedAt: instant("briefed_at"),
     briefedBy: text("briefed_by").references(() => users.id),
@@ -43,7 +54,9 @@ export const sorties = sqliteTable(
 export const sortieCrew = sqliteTable(
   "sortie_crew",
   {
-    sortieId: text("sortie_id").notNull().references(() => sorties.id),
+    sortieId: text("sortie_id")
+      .notNull()
+      .references(() => sorties.id),
     position: integer("position").notNull(),
     userId: text("user_id").references(() => users.id),
     name: text("name").notNull(),
@@ -57,9 +70,13 @@ export const sortieCrew = sqliteTable(
 export const sortieCards = sqliteTable(
   "sortie_cards",
   {
-    sortieId: text("sortie_id").notNull().references(() => sorties.id),
+    sortieId: text("sortie_id")
+      .notNull()
+      .references(() => sorties.id),
     position: integer("position").notNull(),
-    revisionId: text("revision_id").notNull().references(() => cardRevisions.id),
+    revisionId: text("revision_id")
+      .notNull()
+      .references(() => cardRevisions.id),
     answer: text("answer", { enum: ["accepted", "declined"] }),
     answeredDigest: text("answered_digest"),
     answeredBy: text("answered_by").references(() => users.id),
@@ -79,10 +96,14 @@ export const debriefs = sqliteTable(
   "debriefs",
   {
     id: id(), // minted by the phone: the same debrief sent twice is one
-    sortieId: text("sortie_id").notNull().references(() => sorties.id),
+    sortieId: text("sortie_id")
+      .notNull()
+      .references(() => sorties.id),
     content: text("content", { mode: "json" }).$type<Debrief>().notNull(),
     contentDigest: text("content_digest").notNull(),
-    submittedBy: text("submitted_by").notNull().references(() => users.id),
+    submittedBy: text("submitted_by")
+      .notNull()
+      .references(() => users.id),
     submittedAt: instant("submitted_at").notNull(),
     reviewedAt: instant("reviewed_at"),
     reviewedBy: text("reviewed_by").references(() => users.id),
@@ -95,8 +116,12 @@ export const checkReports = sqliteTable(
   "check_reports",
   {
     id: id(),
-    sortieId: text("sortie_id").notNull().references(() => sorties.id),
-    revisionId: text("revision_id").notNull().references(() => cardRevisions.id),
+    sortieId: text("sortie_id")
+      .notNull()
+      .references(() => sorties.id),
+    revisionId: text("revision_id")
+      .notNull()
+      .references(() => cardRevisions.id),
     version: integer("version").notNull(),
     coreVersion: text("core_version").notNull(),
     why: text("why").notNull(), // "debrief submitted", "calibration … renewed"
@@ -106,11 +131,40 @@ export const checkReports = sqliteTable(
   (t) => [uniqueIndex("check_reports_version").on(t.sortieId, t.revisionId, t.version), isJson("check_reports_report", t.report)],
 );
 
+/** What the engineer says a flown point is worth; the newest row counts, earlier ones stay. */
+export const pointDispositions = sqliteTable(
+  "point_dispositions",
+  {
+    id: id(),
+    sortieId: text("sortie_id")
+      .notNull()
+      .references(() => sorties.id),
+    revisionId: text("revision_id")
+      .notNull()
+      .references(() => cardRevisions.id),
+    pointId: text("point_id").notNull(),
+    disposition: text("disposition", { enum: DISPOSITIONS }).notNull(),
+    why: text("why").notNull().default(""),
+    decidedBy: text("decided_by")
+      .notNull()
+      .references(() => users.id),
+    decidedAt: instant("decided_at").notNull(),
+    supersededAt: instant("superseded_at"),
+  },
+  (t) => [
+    uniqueIndex("point_dispositions_one_in_force").on(t.sortieId, t.revisionId, t.pointId).where(sql`${t.supersededAt} is null`),
+    oneOf("point_dispositions_disposition", t.disposition, DISPOSITIONS),
+    check("point_dispositions_why", sql`${t.disposition} = 'accept' or length(trim(${t.why})) > 0`),
+  ],
+);
+
 export const squawks = sqliteTable(
   "squawks",
   {
     id: id(),
-    programmeId: text("programme_id").notNull().references(() => programmes.id),
+    programmeId: text("programme_id")
+      .notNull()
+      .references(() => programmes.id),
     number: integer("number").notNull(),
     system: text("system").notNull(),
     text: text("text").notNull(),

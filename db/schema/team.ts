@@ -24,12 +24,20 @@ export const users = sqliteTable(
 export const memberships = sqliteTable(
   "memberships",
   {
-    teamId: text("team_id").notNull().references(() => teams.id),
-    userId: text("user_id").notNull().references(() => users.id),
+    teamId: text("team_id")
+      .notNull()
+      .references(() => teams.id),
+    userId: text("user_id")
+      .notNull()
+      .references(() => users.id),
     residualRisk: text("residual_risk", { enum: RISK_LEVELS }).notNull().default("Medium"), // the highest a reviewer may accept
     removedAt: instant("removed_at"),
   },
-  (t) => [primaryKey({ columns: [t.teamId, t.userId] }), index("memberships_user").on(t.userId), oneOf("memberships_risk", t.residualRisk, RISK_LEVELS)],
+  (t) => [
+    primaryKey({ columns: [t.teamId, t.userId] }),
+    index("memberships_user").on(t.userId),
+    oneOf("memberships_risk", t.residualRisk, RISK_LEVELS),
+  ],
 );
 
 export const memberRoles = sqliteTable(
@@ -47,8 +55,12 @@ export const sessions = sqliteTable(
   "sessions",
   {
     id: id(),
-    userId: text("user_id").notNull().references(() => users.id),
-    teamId: text("team_id").notNull().references(() => teams.id),
+    userId: text("user_id")
+      .notNull()
+      .references(() => users.id),
+    teamId: text("team_id")
+      .notNull()
+      .references(() => teams.id),
     createdAt: instant("created_at").notNull(),
     expiresAt: instant("expires_at").notNull(),
     endedAt: instant("ended_at"),
@@ -58,4 +70,8 @@ export const sessions = sqliteTable(
 );
 
 /** Facts of one installation, such as the day the demo was seeded. */
-export const settings = sqliteTable("settings", { key: text("key").primaryKey(), value: text("value").notNull(), version: integer("version").notNull().default(1) });
+export const settings = sqliteTable("settings", {
+  key: text("key").primaryKey(),
+  value: text("value").notNull(),
+  version: integer("version").notNull().default(1),
+});

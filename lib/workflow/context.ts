@@ -6,7 +6,11 @@ export type Ctx = {
   readonly db: Db;
   readonly actor: Actor;
   readonly now: Date;
+  /** The calendar day (UTC) that the rules go by, YYYY-MM-DD. */
+  readonly today: string;
   readonly newId: () => string;
   /** The password was asked again and was right: what was shown, and when. */
   readonly proof?: { readonly userId: string; readonly digest: string; readonly at: Date };
+  /** The caller's Idempotency-Key and the digest of what came with it: the same pair answers the first result. */
+  readonly submission?: { readonly key: string; readonly bodyDigest: string };
 };

@@ -3,6 +3,7 @@ import type { Tx } from "@/db/open";
 import { type AuditEntry, appendAudit } from "@/lib/audit/append-audit";
 import type { Ctx } from "./context";
 import { type Permission, requirePermission } from "./permissions";
+import { findSubmission, keepSubmission } from "./submission";
 
 type Definition<S extends z.ZodType, Out> = {
   /** Also the audit action: "card.release". */
@@ -21,8 +22,11 @@ export function defineUseCase<S extends z.ZodType, Out>({ name, permission, inpu
     const parsed = input.parse(raw);
     return ctx.db.transaction(
       (tx) => {
+        const sent = findSubmission(tx, ctx);
+        if (sent) return JSON.parse(sent.answer) as Out;
         const { out, audit } = run(tx, ctx, parsed);
         if (audit !== "unchanged") for (const entry of [audit].flat()) appendAudit(tx, ctx, entry.action ?? name, entry);
+        keepSubmission(tx, ctx, out);
         return out;
       },
       { behavior: "immediate" },

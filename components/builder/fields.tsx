@@ -1,22 +1,19 @@
 "use client";
 import { type ReactNode, useEffect, useId, useState } from "react";
-
-/** The builder's dense controls: 44 px high, label above, error beneath, what was typed kept. */
-export const CONTROL =
-  "h-11 w-full min-w-0 rounded-[6px] border border-ink-soft bg-sheet px-3 text-[15px] text-ink placeholder:text-ink-soft disabled:border-rule disabled:text-ink-soft aria-invalid:border-arc-red aria-invalid:border-2";
+import { CONTROL } from "@/components/ui/input";
 
 type Common = { label: string; hideLabel?: boolean; error?: string | null; hint?: ReactNode; disabled?: boolean; focusKey?: string };
 
 function Frame({ id, label, hideLabel, error, hint, children }: Common & { id: string; children: ReactNode }) {
   return (
     <div className="min-w-0">
-      <label htmlFor={id} className={hideLabel ? "sr-only" : "mb-1 block text-[13px] text-ink-soft"}>
+      <label htmlFor={id} className={hideLabel ? "sr-only" : "mb-1 block text-sm text-ink-soft"}>
         {label}
       </label>
       {children}
-      {hint ? <p className="mt-1 text-[13px] text-ink-soft">{hint}</p> : null}
+      {hint ? <p className="mt-1 text-sm text-ink-soft">{hint}</p> : null}
       {error ? (
-        <p id={`${id}-error`} className="mt-1 text-[13px] text-ink-red">
+        <p id={`${id}-error`} className="mt-1 text-sm text-ink-red">
           {error}
         </p>
       ) : null}
@@ -62,7 +59,7 @@ export function LinesField({
     <Frame id={id} {...common}>
       <textarea
         id={id}
-        className={`${CONTROL} h-auto py-2`}
+        className={`${CONTROL} py-2`}
         rows={rows}
         value={value}
         maxLength={maxLength}
@@ -130,7 +127,7 @@ export function NumberField({ value, onChange, unit, optional = false, low, high
             else if (read !== null && !(low !== undefined && read < low) && !(high !== undefined && read > high)) onChange(read);
           }}
         />
-        {unit ? <span className="shrink-0 text-[13px] text-ink-soft">{unit}</span> : null}
+        {unit ? <span className="shrink-0 text-sm text-ink-soft">{unit}</span> : null}
       </div>
     </Frame>
   );
@@ -183,7 +180,7 @@ export function TickField({
   focusKey?: string;
 }) {
   return (
-    <label className="flex min-h-11 items-center gap-3 text-[15px]">
+    <label className="flex min-h-11 items-center gap-3 text-base">
       <input
         type="checkbox"
         className="size-5 shrink-0 accent-spine"

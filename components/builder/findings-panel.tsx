@@ -1,13 +1,10 @@
 "use client";
 import { Check } from "lucide-react";
 import { useState } from "react";
+import { Input } from "@/components/ui/input";
 import type { Finding } from "@/lib/testcards/readiness-types";
+import { findingKey } from "@/lib/workflow/card/policy";
 import { FindingMark } from "./finding-mark";
-
-/** Two findings of one kind at one place share an answer; a changed place asks again. */
-export function findingKey(finding: Finding): string {
-  return `${finding.code} ${JSON.stringify(finding.where)}`;
-}
 
 type PanelProps = {
   findings: Finding[];
@@ -23,8 +20,8 @@ export function FindingsPanel({ findings, answers, onAnswer, onJump, facts, read
   const should = findings.filter(({ severity }) => severity === "should");
   return (
     <section aria-label="Before release">
-      <h2 className="font-bold text-[17px]">Before release</h2>
-      <p className="mb-2 text-[13px] text-ink-soft" aria-live="polite" data-testid="finding-count">
+      <h2 className="font-bold text-lg">Before release</h2>
+      <p className="mb-2 text-sm text-ink-soft" aria-live="polite" data-testid="finding-count">
         {must.length} must, {should.length} should
       </p>
       <ul>
@@ -69,17 +66,13 @@ function FindingRow({ finding, answer, onAnswer, onJump, readOnly }: RowProps) {
             {finding.message}
           </button>
           {finding.severity === "should" && !readOnly && !open ? (
-            <button
-              type="button"
-              className="mt-1 min-h-6 text-[13px] text-ink-soft underline underline-offset-4"
-              onClick={() => setOpen(true)}
-            >
+            <button type="button" className="mt-1 min-h-6 text-sm text-ink-soft underline underline-offset-4" onClick={() => setOpen(true)}>
               Answer in one line
             </button>
           ) : null}
           {finding.severity === "should" && open ? (
-            <input
-              className="mt-2 h-11 w-full rounded-[6px] border border-ink-soft bg-sheet px-3"
+            <Input
+              className="mt-2"
               aria-label={`Answer: ${finding.message}`}
               placeholder="Why it may stand"
               maxLength={200}

@@ -28,7 +28,7 @@ export function SheetWorkspace({ pages, points, selected, onSelect, findings, ca
   return (
     <div className="mx-auto flex w-full max-w-[600px] flex-col gap-8">
       {pages.map((page) => (
-        <section key={page.number} aria-label={`Page ${page.number} of ${page.of}`} className="relative bg-white shadow-sheet">
+        <section key={page.number} aria-label={`Page ${page.number} of ${page.of}`} className="relative bg-sheet shadow-sheet">
           <SheetPageView page={page} />
           {page.regions.map((region) => {
             const index = points.findIndex(({ id }) => id === region.point);
@@ -106,14 +106,14 @@ function PointRegion({ page, region, point, index, selected, onSelect, open, rea
           {...listeners}
           {...attributes}
           aria-label={`${name}: move`}
-          className="absolute top-0 -left-9 flex h-11 w-8 cursor-grab touch-none items-center justify-center text-ink-on-sheet hover:bg-wash-blue active:cursor-grabbing"
+          className="absolute top-0 -left-9 flex h-11 w-8 cursor-grab touch-none items-center justify-center text-ink hover:bg-wash-blue active:cursor-grabbing"
         >
           <GripVertical aria-hidden className="size-5" />
         </button>
       ) : null}
       {region.part === 1 && open > 0 ? (
         <span
-          className="pointer-events-none absolute -top-3 -right-3 flex size-6 items-center justify-center bg-arc-red font-bold text-[13px] text-white"
+          className="pointer-events-none absolute -top-3 -right-3 flex size-6 items-center justify-center bg-arc-red font-bold text-sm text-sheet"
           aria-hidden
         >
           {open}
@@ -138,7 +138,7 @@ function Slot({ slot, page, carried }: { slot: DropSlot; page: SheetPage; carrie
 
 function DropHere({ carried, at }: { carried: string; at: number }) {
   return (
-    <p className="flex h-full w-full items-center justify-center border-2 border-arc-blue border-dashed bg-wash-blue px-3 text-center text-[15px] text-arc-blue">
+    <p className="flex h-full w-full items-center justify-center border-2 border-arc-blue border-dashed bg-wash-blue px-3 text-center text-base text-arc-blue">
       Put “{carried}” here, as point {at + 1}
     </p>
   );

@@ -2,6 +2,8 @@
 import { useDraggable } from "@dnd-kit/core";
 import { GripVertical, Plus } from "lucide-react";
 import { useMemo, useState } from "react";
+import { CONTROL } from "@/components/ui/input";
+import { Select } from "@/components/ui/select";
 import type { CardPoint, Hazard, Parameter } from "@/lib/testcards/card";
 import { riskLevel } from "@/lib/testcards/risk";
 import { RISK_LEVELS, type RiskLevel } from "@/lib/testcards/words";
@@ -66,46 +68,44 @@ export function ShelfPanel({ shelf, hazards, parameters, onCard, onPut }: ShelfP
   };
   return (
     <section aria-label="Test points on the shelf" className="flex flex-col">
-      <h2 className="font-bold text-[17px]">Test points</h2>
+      <h2 className="font-bold text-lg">Test points</h2>
       <input
         type="search"
         value={words}
         onChange={(event) => setWords(event.target.value)}
         placeholder="Find by name, reading or hazard"
         aria-label="Find a test point"
-        className="field mt-3"
+        className={`${CONTROL} mt-3`}
       />
       <fieldset className="mt-3 flex">
         <legend className="sr-only">Where flown</legend>
         {(["all", "ground", "air"] as const).map((one) => (
-          <label key={one} className="segment flex-1">
+          <label
+            key={one}
+            className="flex min-h-11 flex-1 cursor-pointer items-center justify-center border border-control bg-sheet text-base first-of-type:rounded-s-md last:rounded-e-md has-checked:border-ink has-checked:bg-ink has-checked:text-sheet has-focus-visible:outline-3 has-focus-visible:outline-focus has-focus-visible:outline-offset-2"
+          >
             <input type="radio" name="shelf-place" className="sr-only" checked={place === one} onChange={() => setPlace(one)} />
             {one === "all" ? "All" : one === "ground" ? "Ground" : "Air"}
           </label>
         ))}
       </fieldset>
       <div className="mt-2 grid grid-cols-2 gap-2">
-        <select
-          aria-label="Residual risk"
-          className="field"
-          value={risk}
-          onChange={(event) => setRisk(event.target.value as RiskLevel | "all")}
-        >
+        <Select aria-label="Residual risk" value={risk} onChange={(event) => setRisk(event.target.value as RiskLevel | "all")}>
           <option value="all">Any risk</option>
           {RISK_LEVELS.filter((level) => level !== "Eliminated").map((level) => (
             <option key={level}>{level}</option>
           ))}
-        </select>
-        <select aria-label="Parameter read" className="field" value={parameter} onChange={(event) => setParameter(event.target.value)}>
+        </Select>
+        <Select aria-label="Parameter read" value={parameter} onChange={(event) => setParameter(event.target.value)}>
           <option value="all">Any reading</option>
           {parameters.map(({ code, name }) => (
             <option key={code} value={code}>
               {name}
             </option>
           ))}
-        </select>
+        </Select>
       </div>
-      <p className="mt-3 border-ink border-b-[1.5px] pb-2 text-[13px] text-ink-soft" aria-live="polite">
+      <p className="mt-3 border-ink border-b-[1.5px] pb-2 text-sm text-ink-soft" aria-live="polite">
         {filtered ? `${shown.length} of ${shelf.length} on the shelf` : `On the shelf, ${shelf.length}`}
       </p>
       <ul>
@@ -166,9 +166,9 @@ function ShelfItem({
         <span className="min-w-0 flex-1">
           <span className="flex justify-between gap-2">
             <span className="font-bold">{point.title}</span>
-            <span className="shrink-0 text-[13px] text-ink-soft">{risk ?? ""}</span>
+            <span className="shrink-0 text-sm text-ink-soft">{risk ?? ""}</span>
           </span>
-          <span className="block text-[13px] text-ink-soft">
+          <span className="block text-sm text-ink-soft">
             {point.template?.code} · {facts.join(", ")}
           </span>
         </span>

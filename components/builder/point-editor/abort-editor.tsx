@@ -1,5 +1,7 @@
 "use client";
 import { Plus, Trash2 } from "lucide-react";
+import { buttonClass } from "@/components/ui/button";
+import { formatOnGauge, unitLabel } from "@/lib/format/unit";
 import { correctReading } from "@/lib/testcards/calibration";
 import type { AbortLine, CardDocument, CardPoint, Instrument } from "@/lib/testcards/card";
 import { abortsOf } from "@/lib/testcards/card";
@@ -35,7 +37,7 @@ export function AbortEditor({ card, point, change, newId }: PointPartProps) {
         onChange={(standing) => change({ aborts: { ...aborts, standing } }, "standing aborts")}
         focusKey="aborts"
       />
-      {aborts.standing ? <p className="text-[13px] text-ink-soft">{inherited.map((line) => lineWords(card, line)).join(" · ")}</p> : null}
+      {aborts.standing ? <p className="text-sm text-ink-soft">{inherited.map((line) => lineWords(card, line)).join(" · ")}</p> : null}
       {aborts.lines.map((line) =>
         line.kind === "number" ? (
           <NumberLineEditor
@@ -78,7 +80,7 @@ export function AbortEditor({ card, point, change, newId }: PointPartProps) {
         <AddNumber card={card} point={point} onAdd={addFor} />
         <button
           type="button"
-          className="btn-outline"
+          className={buttonClass("outline")}
           onClick={() => set([...aborts.lines, { kind: "event", id: newId(), text: "" }], "abort event added")}
         >
           <Plus aria-hidden className="size-4" /> Event
@@ -146,14 +148,14 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
   const offRule = proposal !== null && proposal.onGauge !== line.onGauge;
   return (
     <fieldset className="border border-rule p-3">
-      <legend className="px-1 font-bold text-[15px]">
+      <legend className="px-1 font-bold text-base">
         {instrument.gaugeName} {line.side === "max" ? "at or above" : "at or below"}
       </legend>
       <div className="grid grid-cols-[1fr_1fr_auto] items-end gap-2">
         <NumberField
           label="On the gauge"
           value={line.onGauge}
-          unit={instrument.unit}
+          unit={unitLabel(instrument.unit)}
           focusKey={`aborts ${line.id}`}
           onChange={(onGauge) => {
             if (onGauge !== null)
@@ -168,7 +170,7 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
         <NumberField
           label="True"
           value={tidy(line.trueValue)}
-          unit={parameter.unit}
+          unit={unitLabel(parameter.unit)}
           onChange={(trueValue) => {
             const onGauge = trueValue === null ? null : gaugeFromTrue(trueValue, parameter.unit, instrument);
             if (trueValue !== null && onGauge !== null) onChange({ ...line, trueValue, onGauge: tidy(onGauge), setBy: "true" });
@@ -176,7 +178,7 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
         />
         <RemoveButton label={`Remove the ${instrument.gaugeName} line`} onClick={onRemove} />
       </div>
-      <p className="mt-2 text-[13px] text-ink-soft">
+      <p className="mt-2 text-sm text-ink-soft">
         {proposal
           ? `By the rule: ${proposal.onGauge} on the gauge (${tidy(proposal.trueValue)} true).`
           : "The rule has no card limit to start from here."}
@@ -214,5 +216,5 @@ export function RemoveButton({ label, onClick }: { label: string; onClick: () =>
 function lineWords(card: CardDocument, line: AbortLine): string {
   if (line.kind === "event") return line.text;
   const instrument = card.programme.instruments.find(({ id }) => id === line.instrument);
-  return `${instrument?.gaugeName ?? line.parameter} ${line.side === "min" ? "below " : ""}${line.onGauge} ${instrument?.unit ?? ""}`;
+  return `${instrument?.gaugeName ?? line.parameter} ${line.side === "min" ? "below " : ""}${instrument ? formatOnGauge(line.onGauge, instrument) : line.onGauge}`;
 }

@@ -27,6 +27,7 @@ export default function proxy(request: NextRequest): NextResponse {
     const policy = noncePolicy(nonce, development);
     const headers = new Headers(request.headers);
     headers.set("x-nonce", nonce);
+    headers.set("x-path", path + request.nextUrl.search); // where to come back to after a sign-in
     headers.set("Content-Security-Policy", policy); // Next reads the nonce for its own scripts here
     response = NextResponse.next({ request: { headers } });
     response.headers.set("Content-Security-Policy", policy);

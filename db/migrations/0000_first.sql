@@ -466,6 +466,12 @@ CREATE TABLE `memberships` (
 ) STRICT;
 --> statement-breakpoint
 CREATE INDEX `memberships_user` ON `memberships` (`user_id`);--> statement-breakpoint
+CREATE TABLE `rate_limits` (
+	`key` text PRIMARY KEY NOT NULL,
+	`points` integer NOT NULL,
+	`expire` integer
+) STRICT;
+--> statement-breakpoint
 CREATE TABLE `sessions` (
 	`id` text PRIMARY KEY NOT NULL,
 	`user_id` text NOT NULL,

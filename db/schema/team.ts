@@ -75,3 +75,10 @@ export const settings = sqliteTable("settings", {
   value: text("value").notNull(),
   version: integer("version").notNull().default(1),
 });
+
+/** Tries counted against their limits, for sign-in, asked-again passwords and public look-ups; `expire` in ms since 1970. */
+export const rateLimits = sqliteTable("rate_limits", {
+  key: text("key").primaryKey(),
+  points: integer("points").notNull(),
+  expire: integer("expire"),
+});

@@ -1,4 +1,9 @@
 import { requireNode } from "./lib/require-node.mjs";
 
 requireNode();
-import("./lib/build-app.mjs").then((module) => module.buildApp());
+import("./lib/build-app.mjs").then(async ({ buildApp }) => {
+  await buildApp().catch((error) => {
+    console.error(error.message);
+    process.exit(1);
+  });
+});

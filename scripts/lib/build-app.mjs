@@ -2,7 +2,7 @@ import { createHash } from "node:crypto";
 import { existsSync, readdirSync, readFileSync, statSync, writeFileSync } from "node:fs";
 import { join } from "node:path";
 import { writePhoneShell } from "./phone-shell.mjs";
-import { fail, inRoot } from "./project.mjs";
+import { inRoot } from "./project.mjs";
 import { runNode } from "./run-command.mjs";
 
 const stampFile = inRoot(".next", "greenarc-build");
@@ -11,16 +11,20 @@ const stampFile = inRoot(".next", "greenarc-build");
 const sources = ["app", "components", "lib", "db", "fonts", "public", "scripts/worker", "scripts/lib/phone-shell.mjs"];
 const sourceFiles = ["proxy.ts", "next.config.ts", "postcss.config.mjs", "tsconfig.json", "package-lock.json"];
 
+/** True when there is no build, or the sources changed since. */
+export function buildIsStale() {
+  return !existsSync(stampFile) || readFileSync(stampFile, "utf8") !== sourceStamp();
+}
+
 export async function buildIfStale() {
-  if (existsSync(stampFile) && readFileSync(stampFile, "utf8") === sourceStamp()) return;
-  await buildApp();
+  if (buildIsStale()) await buildApp();
 }
 
 export async function buildApp() {
   const stamp = sourceStamp();
   const env = { ...process.env, NODE_ENV: "production", NEXT_TELEMETRY_DISABLED: "1" };
   const code = await runNode([inRoot("node_modules", "next", "dist", "bin", "next"), "build"], { env });
-  if (code !== 0) fail("The build failed; the reason stands above.");
+  if (code !== 0) throw new Error("The build failed; the reason stands above.");
   writePhoneShell();
   writeFileSync(stampFile, stamp);
 }

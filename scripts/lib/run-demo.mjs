@@ -14,7 +14,7 @@ await install();
 fillDemoSettings(port);
 requireWritable(dirname(process.env.DATABASE_FILE));
 await prepareDemoData(process.env.DATABASE_FILE, { fresh: process.argv.includes("--fresh") });
-await buildIfStale();
+await buildIfStale().catch((error) => fail(error.message));
 const address = await serve(port);
 
 const password = process.env.DEMO_PASSWORD === demoPassword ? demoPassword : "the one in DEMO_PASSWORD";

@@ -1,0 +1,60 @@
+import { expect, test } from "./fixtures";
+
+test.use({ viewport: { width: 390, height: 844 } });
+
+/** Waits for the service worker to have kept the page and to answer for it. */
+const kept = () => navigator.serviceWorker.ready.then((registration) => registration.active?.state);
+
+test("the debrief page opens without a signal, with its policy and without a word in the console", async ({ page, context }) => {
+  await page.goto("/debrief/0192d3a0-0000-7000-8000-000000000000");
+  const online = await page.evaluate(kept);
+  expect(online).toMatch(/activat/);
+
+  await context.setOffline(true);
+  const answer = await page.reload();
+  expect(answer?.fromServiceWorker()).toBe(true);
+  const policy = answer?.headers()["content-security-policy"] ?? "";
+  expect(policy).toContain("script-src 'self' 'sha256-");
+  expect(policy).not.toMatch(/script-src[^;]*unsafe/);
+  await expect(page.getByRole("main")).toBeVisible();
+});
+
+test("the debrief page opens when the server is gone, under another address too", async ({ page, server }) => {
+  await page.goto("/debrief/first");
+  await page.evaluate(kept);
+  await server.stop();
+  await page.goto("/debrief/second");
+  await expect(page.getByRole("main")).toBeVisible();
+  expect(new URL(page.url()).pathname).toBe("/debrief/second");
+});
+
+test("coming back online does not reload the page", async ({ page, context }) => {
+  await page.goto("/debrief/first");
+  await page.evaluate(kept);
+  await page.evaluate(() => {
+    document.documentElement.dataset.untouched = "yes";
+  });
+  await context.setOffline(true);
+  await context.setOffline(false);
+  await page.evaluate(() => fetch("/api/health").then((response) => response.json()));
+  await expect(page.locator("html")).toHaveAttribute("data-untouched", "yes");
+});
+
+test("an inline script that the build did not write does not run on the debrief page", async ({ page, consoleWatch }) => {
+  consoleWatch.allow(/Content Security Policy/);
+  await page.goto("/debrief/first");
+  const ran = await page.evaluate(() => {
+    const script = document.createElement("script");
+    script.textContent = "window.planted = true";
+    document.body.append(script);
+    return "planted" in window;
+  });
+  expect(ran).toBe(false);
+});
+
+test("the service worker answers for the debrief alone", async ({ page, baseURL }) => {
+  await page.goto("/debrief/first");
+  await page.evaluate(kept);
+  const scopes = await page.evaluate(() => navigator.serviceWorker.getRegistrations().then((all) => all.map((one) => one.scope)));
+  expect(scopes).toEqual([`${baseURL}/debrief`]);
+});

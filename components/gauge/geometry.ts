@@ -32,7 +32,8 @@ export function scaleAround(values: readonly number[], room = 0.12): Span {
   if (finite.length === 0) return { low: 0, high: 1 };
   const low = Math.min(...finite);
   const high = Math.max(...finite);
-  const span = high - low || Math.abs(high) || 1;
+  const spread = high - low;
+  const span = spread > 1e-6 * Math.max(1, Math.abs(high)) ? spread : Math.max(1, Math.abs(high) / 10); // one value alone
   const step = roundStep(span * (1 + 2 * room), 8);
   return { low: Math.floor((low - span * room) / step) * step, high: Math.ceil((high + span * room) / step) * step };
 }

@@ -33,9 +33,15 @@ export function formatQuantity(quantity: Quantity, decimals = ownDecimals(quanti
   return withUnit(formatNumber(quantity.value, decimals), quantity.unit);
 }
 
-/** A value on a gauge, at the decimals that its readable step needs. */
+/** A figure as a person reads it: 92.0 on a gauge readable to 0.1, but 105 and 102.5 on one readable to 2.5. */
+export function figureOnGauge(value: number, readable: number): string {
+  const decimals = decimalsOf(readable);
+  const readsEveryDigit = Math.abs(readable * 10 ** decimals - 1) < 1e-6;
+  return formatNumber(value, readsEveryDigit ? decimals : ownDecimals(value, decimals));
+}
+
 export function formatOnGauge(value: number, instrument: { unit: Unit; readable: number }): string {
-  return withUnit(formatNumber(value, decimalsOf(instrument.readable)), instrument.unit);
+  return withUnit(figureOnGauge(value, instrument.readable), instrument.unit);
 }
 
 /** "75 to 98 °C", "98 °C or less", "55 °C or more". */

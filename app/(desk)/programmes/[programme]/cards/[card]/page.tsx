@@ -1,0 +1,69 @@
+import Link from "next/link";
+import { CardBuilder } from "@/components/builder/card-builder";
+import { CardRecord } from "@/components/card/card-record";
+import { CardState } from "@/components/card/card-state";
+import { requestCtx } from "@/lib/auth/request-ctx";
+import { getCardRevision } from "@/lib/workflow/card/queries";
+import { listTestPoints } from "@/lib/workflow/programme/queries";
+import { orNotFound } from "../../../../or-not-found";
+
+type Props = { params: Promise<{ programme: string; card: string }>; searchParams: Promise<{ rev?: string }> };
+
+export async function generateMetadata({ params, searchParams }: Props) {
+  const view = await viewOf(params, searchParams);
+  return { title: `Card ${view.card.number} ${view.document.content.title}` };
+}
+
+async function viewOf(params: Props["params"], searchParams: Props["searchParams"]) {
+  const [{ card }, { rev }] = [await params, await searchParams];
+  const { db, actor, today } = await requestCtx();
+  return orNotFound(() => getCardRevision(db, actor, card, { today, ...(rev ? { letter: rev } : {}) }));
+}
+
+/** A draft is built here; anything else is read, reviewed and printed here. */
+export default async function CardPage({ params, searchParams }: Props) {
+  const { programme } = await params;
+  const { db, actor } = await requestCtx();
+  const view = await viewOf(params, searchParams);
+  const { document, revision } = view;
+  const { widths: _widths, ...context } = view.context;
+  return (
+    <>
+      <header className="flex flex-wrap items-center gap-x-4 gap-y-2 pb-4">
+        <h1 className="font-bold text-xl">
+          Card {view.card.number} <span className="ms-2">{document.content.title}</span>
+        </h1>
+        <CardState state={revision.state} letter={revision.letter} />
+        {view.revisions.length > 1 ? (
+          <nav aria-label="Revisions" className="flex gap-1">
+            {view.revisions.toReversed().map(({ id, letter, state }) => (
+              <Link
+                key={id}
+                href={`?rev=${letter}`}
+                aria-current={id === revision.id ? "page" : undefined}
+                title={`Rev ${letter}, ${state}`}
+                className="flex size-11 items-center justify-center underline underline-offset-4 aria-[current]:font-bold aria-[current]:no-underline"
+              >
+                {letter}
+              </Link>
+            ))}
+          </nav>
+        ) : null}
+      </header>
+      {view.may.edit ? (
+        <CardBuilder
+          key={revision.id}
+          identity={document.identity}
+          version={revision.version}
+          content={document.content}
+          programme={view.programme}
+          context={context}
+          shelf={listTestPoints(db, actor, programme).map(({ content }) => content)}
+          answers={revision.answers}
+        />
+      ) : (
+        <CardRecord key={revision.id} view={{ ...view, context }} />
+      )}
+    </>
+  );
+}

@@ -1,9 +1,9 @@
 import Link from "next/link";
 import { CardBuilder } from "@/components/builder/card-builder";
-import { CardRecord } from "@/components/card/card-record";
+import { CardRecord, type CardRecordView } from "@/components/card/card-record";
 import { CardState } from "@/components/card/card-state";
 import { requestCtx } from "@/lib/auth/request-ctx";
-import { getCardRevision } from "@/lib/workflow/card/queries";
+import { type CardView, getCardRevision } from "@/lib/workflow/card/queries";
 import { listTestPoints } from "@/lib/workflow/programme/queries";
 import { orNotFound } from "../../../../or-not-found";
 
@@ -18,6 +18,21 @@ async function viewOf(params: Props["params"], searchParams: Props["searchParams
   const [{ card }, { rev }] = [await params, await searchParams];
   const { db, actor, today } = await requestCtx();
   return orNotFound(() => getCardRevision(db, actor, card, { today, ...(rev ? { letter: rev } : {}) }));
+}
+
+/** Only what the record shows goes to the browser. */
+function toRecord({ card, revision, document, digest, findings, comments, stamp, may }: CardView): CardRecordView {
+  const { id, letter, state, version, answers, endedWhy, endedAt } = revision;
+  return {
+    card: { id: card.id, number: card.number },
+    revision: { id, letter, state, version, answers, endedWhy, endedAt },
+    document,
+    digest,
+    findings,
+    comments,
+    stamp,
+    may,
+  };
 }
 
 /** A draft is built here; anything else is read, reviewed and printed here. */
@@ -62,7 +77,7 @@ export default async function CardPage({ params, searchParams }: Props) {
           answers={revision.answers}
         />
       ) : (
-        <CardRecord key={revision.id} view={{ ...view, context }} />
+        <CardRecord key={revision.id} view={toRecord(view)} />
       )}
     </>
   );

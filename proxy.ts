@@ -1,7 +1,7 @@
 import { readFileSync } from "node:fs";
 import { join } from "node:path";
 import { type NextRequest, NextResponse } from "next/server";
-import { commonHeaders, hashPolicy, noncePolicy } from "@/lib/http/content-security";
+import { commonHeaders, developmentShellPolicy, hashPolicy, noncePolicy } from "@/lib/http/content-security";
 
 const development = process.env.NODE_ENV === "development";
 
@@ -19,9 +19,9 @@ export default function proxy(request: NextRequest): NextResponse {
   const path = request.nextUrl.pathname;
   const shell = path === "/debrief" || path.startsWith("/debrief/");
   let response: NextResponse;
-  if (shell && !development) {
+  if (shell) {
     response = NextResponse.next();
-    response.headers.set("Content-Security-Policy", hashPolicy(readShellHashes()));
+    response.headers.set("Content-Security-Policy", development ? developmentShellPolicy() : hashPolicy(readShellHashes()));
   } else {
     const nonce = Buffer.from(crypto.getRandomValues(new Uint8Array(16))).toString("base64");
     const policy = noncePolicy(nonce, development);

@@ -1,6 +1,7 @@
 import type { Metadata, Viewport } from "next";
 import type { ReactNode } from "react";
 import { b612 } from "@/app/fonts";
+import { LIGHT_COOKIE } from "@/components/light";
 import { KeepShell } from "./keep-shell";
 import "@/app/globals.css";
 
@@ -19,10 +20,17 @@ export const viewport: Viewport = {
   ],
 };
 
+// The page is the same file for everybody, so the light the person chose is read here, before the first paint.
+const setLight = `const light = /(?:^|; )${LIGHT_COOKIE}=(day|ramp)(?:;|$)/.exec(document.cookie); if (light) document.documentElement.dataset.light = light[1];`;
+
 /** Static for everybody: nothing here may depend on who asks, or the kept page and its policy would disagree. */
 export default function PhoneLayout({ children }: { children: ReactNode }) {
   return (
-    <html lang="en" className={b612.variable}>
+    <html lang="en" className={b612.variable} suppressHydrationWarning>
+      <head>
+        {/* biome-ignore lint/security/noDangerouslySetInnerHtml: a constant; the build allows it by its hash */}
+        <script dangerouslySetInnerHTML={{ __html: setLight }} />
+      </head>
       <body>
         {children}
         <KeepShell />

@@ -29,6 +29,11 @@ export function hashPolicy(scriptHashes: readonly string[]): string {
   return [...always, script, "style-src 'self'"].join("; ");
 }
 
+/** The same page under the development server, which renders it anew each time and cannot know its scripts beforehand. */
+export function developmentShellPolicy(): string {
+  return [...always, "script-src 'self' 'unsafe-inline' 'unsafe-eval'", "style-src 'self' 'unsafe-inline'"].join("; ");
+}
+
 /** The headers every answer carries. */
 export function commonHeaders(overHttps: boolean): [name: string, value: string][] {
   const headers: [string, string][] = [

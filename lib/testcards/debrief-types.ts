@@ -2,7 +2,23 @@
 import type { Limit, Quantity } from "./card";
 import type { Finding } from "./readiness-types";
 import type { Unit } from "./units";
-import type { AbortDiscipline, CallWord, Comparison, Disposition, HotDayBasis, LimitCondition, LimitStatistic, Note, Outcome, Reason, Side, SortieKind, SquawkSeverity, StepDecision, Verdict } from "./words";
+import type {
+  AbortDiscipline,
+  CallWord,
+  Comparison,
+  Disposition,
+  HotDayBasis,
+  LimitCondition,
+  LimitStatistic,
+  Note,
+  Outcome,
+  Reason,
+  Side,
+  SortieKind,
+  SquawkSeverity,
+  StepDecision,
+  Verdict,
+} from "./words";
 
 export type Turbulence = "none" | "light" | "moderate" | "severe";
 
@@ -42,7 +58,16 @@ export type PointDebrief = {
   comment: string;
 };
 
-export type DebriefTimes = { offBlocks: string | null; takeOff: string | null; landing: string | null; onBlocks: string | null; engineStart: string | null; engineStop: string | null; start: string | null; end: string | null };
+export type DebriefTimes = {
+  offBlocks: string | null;
+  takeOff: string | null;
+  landing: string | null;
+  onBlocks: string | null;
+  engineStart: string | null;
+  engineStop: string | null;
+  start: string | null;
+  end: string | null;
+};
 
 export type Debrief = {
   kind: SortieKind;
@@ -56,7 +81,26 @@ export type Debrief = {
   comment: string;
 };
 
-export type FieldPart = "value" | "lowest" | "highest" | "at" | "altitude" | "oat" | "rows" | "answer" | "outcome" | "position" | "on condition" | "ran for" | "top altitude" | "comment" | "time" | "fuel" | "weather" | "revision" | "safety";
+export type FieldPart =
+  | "value"
+  | "lowest"
+  | "highest"
+  | "at"
+  | "altitude"
+  | "oat"
+  | "rows"
+  | "answer"
+  | "outcome"
+  | "position"
+  | "on condition"
+  | "ran for"
+  | "top altitude"
+  | "comment"
+  | "time"
+  | "fuel"
+  | "weather"
+  | "revision"
+  | "safety";
 
 /** One thing the phone asks. Form, schema and the server's check all come from this list. */
 export type DebriefField = {
@@ -90,8 +134,26 @@ export type CheckLine = {
   statistic: LimitStatistic;
   onGauge: { value: number; unit: Unit } | null;
   asTrue: JudgedValue | null; // in the limit's unit
-  hotDay: (JudgedValue & { difference: number; clamped: boolean; ambient: Quantity; hotAmbient: Quantity; pressureAltitudeFt: number; basis: HotDayBasis }) | null;
-  limit: { id: string | null; side: Side; value: number; unit: Unit; source: string; authority: Limit["authority"] | null; appliesWhen: LimitCondition; forS: number } | null;
+  hotDay:
+    | (JudgedValue & {
+        difference: number;
+        clamped: boolean;
+        ambient: Quantity;
+        hotAmbient: Quantity;
+        pressureAltitudeFt: number;
+        basis: HotDayBasis;
+      })
+    | null;
+  limit: {
+    id: string | null;
+    side: Side;
+    value: number;
+    unit: Unit;
+    source: string;
+    authority: Limit["authority"] | null;
+    appliesWhen: LimitCondition;
+    forS: number;
+  } | null;
   verdict: Verdict;
   margin: number | null; // in hand to the limit, in its unit; negative is past it
   probabilityWithin: number | null;
@@ -101,6 +163,8 @@ export type CheckLine = {
   required: boolean;
   why: string; // the reason in figures: "ran 3:10 of 5:00", "slope known to 1.15 of 0.556 °C/min"
   otherBasis: { basis: HotDayBasis; hotDay: JudgedValue; verdict: Verdict; margin: number | null } | null; // only where it changes the verdict
+  /** Only on "abort" lines. There the verdict says no more than whether the number was reached, and counts in no other verdict: show this word. */
+  discipline?: AbortDiscipline | null;
 };
 
 export type DisciplineLine = {
@@ -137,6 +201,8 @@ export type CheckContext = {
   amendments: { reading: string; value: number }[];
   dispositions: { point: string; disposition: Disposition }[];
   groundingOpen: boolean;
+  baselines?: Record<string, number>; // by reading, on the gauge: what "change from baseline" is counted from
+  starts?: { point: string; decision: StepDecision }[]; // of a point that continues a series: what decideStep gave
 };
 
 export type CheckReport = {

@@ -409,6 +409,8 @@ CREATE TABLE `sorties` (
 	`created_at` text NOT NULL,
 	`briefed_at` text,
 	`briefed_by` text,
+	`go_no_go` text,
+	`answers` text DEFAULT '{}' NOT NULL,
 	`closed_why` text,
 	FOREIGN KEY (`programme_id`) REFERENCES `programmes`(`id`) ON UPDATE no action ON DELETE no action,
 	FOREIGN KEY (`configuration_id`) REFERENCES `configurations`(`id`) ON UPDATE no action ON DELETE no action,

@@ -41,6 +41,8 @@ export const sorties = sqliteTable(
     createdAt: instant("created_at").notNull(),
     briefedAt: instant("briefed_at"),
     briefedBy: text("briefed_by").references(() => users.id),
+    goNoGo: text("go_no_go", { mode: "json" }).$type<{ line: string; go: boolean }[] | null>(), // as ticked at the brief
+    answers: text("answers", { mode: "json" }).$type<Record<string, string>>().notNull().default({}), // to "should" findings, by finding key
     closedWhy: text("closed_why"),
   },
   (t) => [

@@ -1,15 +1,19 @@
-import { and, asc, eq, inArray } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull } from "drizzle-orm";
 import type { Db, Tx } from "@/db/open";
-import { cardRevisions, debriefs, sortieCards, sorties, squawks } from "@/db/schema";
+import { cardRevisions, debriefs, memberRoles, memberships, sortieCards, sorties, squawks, users } from "@/db/schema";
 import type { Actor } from "@/lib/auth/roles";
 import type { BuildUpState, SortieContext } from "@/lib/testcards/readiness-types";
-import { may } from "../permissions";
 import { listConfigurations, listStepDecisions, listTestPoints, type StepDecisionRow } from "../programme/queries";
 
 type Reader = Db | Tx;
 
 /** The facts that readiness needs and no card holds, as they stand today; one gathering for cards and sorties. */
-export function getReadinessFacts(db: Reader, actor: Actor, programmeId: string, today: string): SortieContext {
+export function getReadinessFacts(
+  db: Reader,
+  actor: Actor,
+  programmeId: string,
+  { today, writers = [] }: { today: string; writers?: string[] },
+): SortieContext {
   const points = listTestPoints(db, actor, programmeId);
   const decisions = listStepDecisions(db, actor, programmeId);
   const current = listConfigurations(db, actor, programmeId).find((configuration) => configuration.isCurrent);
@@ -17,12 +21,30 @@ export function getReadinessFacts(db: Reader, actor: Actor, programmeId: string,
   return {
     today,
     currentConfiguration: current ? { id: current.id, number: current.number, signed: current.signedAt !== null } : null,
-    releaser: may(actor, "release cards") ? { id: actor.id, name: actor.name, residualRisk: actor.residualRisk } : null,
+    releaser: findReleaser(db, actor, writers),
     buildUp: points.map((point) => buildUpState(point.code, decisions, flown.has(point.code))),
     seriesResults: seriesResults(decisions),
     groundingSquawks: openGrounding(db, programmeId),
     objectivesCovered: [...new Set(points.flatMap((point) => point.content.objectives))].sort(),
   };
+}
+
+/**
+ * Who is about to release, where that is known: this reviewer, or the only one there is who wrote none of it. Where every reviewer
+ * wrote some of it the answer is one of them, so that readiness says a second person is needed.
+ */
+function findReleaser(db: Reader, actor: Actor, writers: string[]): SortieContext["releaser"] {
+  const reviewers = db
+    .select({ id: users.id, name: users.name, residualRisk: memberships.residualRisk })
+    .from(memberRoles)
+    .innerJoin(memberships, and(eq(memberships.userId, memberRoles.userId), eq(memberships.teamId, memberRoles.teamId)))
+    .innerJoin(users, eq(users.id, memberRoles.userId))
+    .where(and(eq(memberRoles.teamId, actor.teamId), eq(memberRoles.role, "reviewer"), isNull(memberships.removedAt)))
+    .orderBy(asc(users.id))
+    .all();
+  const free = reviewers.filter((reviewer) => !writers.includes(reviewer.id));
+  if (free.length === 0) return reviewers.find((reviewer) => reviewer.id === writers[0]) ?? reviewers[0] ?? null;
+  return free.find((reviewer) => reviewer.id === actor.id) ?? (free.length === 1 ? (free[0] ?? null) : null);
 }
 
 /** "clear" and "smaller step" stand once a reviewer countersigned; "hold" needs nobody. */

@@ -11,9 +11,11 @@ export function isFrozen(state: CardState): boolean {
   return state === "released" || state === "superseded" || state === "withdrawn";
 }
 
+export const writersOf = ({ authorId, editedBy }: Pick<RevisionFacts, "authorId" | "editedBy">): string[] => [authorId, ...editedBy];
+
 /** Whoever wrote any of it, the author or a later hand, is not the one to release it. */
 export function wroteIt(person: Pick<Person, "id">, revision: RevisionFacts): boolean {
-  return revision.authorId === person.id || revision.editedBy.includes(person.id);
+  return writersOf(revision).includes(person.id);
 }
 
 export const mayEditCard = (actor: Person, revision: RevisionFacts) => may(actor, "write cards") && revision.state === "draft";

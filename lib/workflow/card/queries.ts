@@ -39,7 +39,7 @@ export function listCards(db: Reader, actor: Actor, programmeId: string) {
     .innerJoin(cardRevisions, eq(cardRevisions.cardId, cards.id))
     .innerJoin(users, eq(users.id, cardRevisions.authorId))
     .where(eq(cards.programmeId, programmeId))
-    .orderBy(asc(cards.number), desc(cardRevisions.createdAt), desc(cardRevisions.id))
+    .orderBy(asc(cards.number), desc(sql`length(${cardRevisions.letter})`), desc(cardRevisions.letter))
     .all();
   const newest = rows.filter((row, index) => rows.findIndex((other) => other.id === row.id) === index);
   return newest.map((card) => {
@@ -117,7 +117,7 @@ export function getCardRevision(db: Reader, actor: Actor, cardId: string, { toda
   const newest = revisions[0] ?? revision;
   const digest = revision.digest ?? digestOf(document);
   const context: CardContext = {
-    ...getReadinessFacts(db, actor, card.programmeId, today),
+    ...getReadinessFacts(db, actor, card.programmeId, { today, writers: policy.writersOf(revision) }),
     digest,
     releasedDigest: revision.digest,
     widths: B612_WIDTHS,

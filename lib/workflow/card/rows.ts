@@ -1,4 +1,4 @@
-import { and, desc, eq, getTableColumns } from "drizzle-orm";
+import { and, desc, eq, getTableColumns, sql } from "drizzle-orm";
 import { alias } from "drizzle-orm/sqlite-core";
 import type { Db, Tx } from "@/db/open";
 import { cardRevisions, cards, programmes, users } from "@/db/schema";
@@ -35,7 +35,7 @@ export function listRevisions(db: Reader, actor: Actor, cardId: string) {
     .leftJoin(releaser, eq(releaser.id, cardRevisions.releasedBy))
     .leftJoin(ender, eq(ender.id, cardRevisions.endedBy))
     .where(eq(cardRevisions.cardId, cardId))
-    .orderBy(desc(cardRevisions.createdAt), desc(cardRevisions.id))
+    .orderBy(desc(sql`length(${cardRevisions.letter})`), desc(cardRevisions.letter))
     .all();
 }
 export type RevisionRow = ReturnType<typeof listRevisions>[number];

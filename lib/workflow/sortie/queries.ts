@@ -67,7 +67,7 @@ export function getSortie(db: Reader, actor: Actor, sortieId: string, { today }:
   const crew = listCrew(db, sortieId);
   const flown = listSortieCards(db, actor, sortie);
   const plan = toSortiePlan(sortie, crew, flown);
-  const context = getReadinessFacts(db, actor, sortie.programmeId, today);
+  const context = getReadinessFacts(db, actor, sortie.programmeId, { today });
   return {
     sortie,
     crew,

@@ -240,6 +240,7 @@ export type Aircraft = {
   fuelUnusableL: number;
   speeds: { code: string; name: string; valueKt: number; airspeed: "KIAS" | "KCAS" }[]; // V_NE, V_FE, V_NO, V_S1 …
   criticalAltitudeFt: number | null;
+  minimumCrew?: number; // 1 unless stated
 };
 
 /** The programme as a card sees it: all that the document freezes besides the card itself. */
@@ -258,7 +259,7 @@ export type ProgrammeSnapshot = {
   thenActions: { air: string[]; ground: string[] };
   standingAborts: AbortLine[];
   reactionMin: number;
-  fuelPlan: { taxiL: number; returnL: number; reserveL: number };
+  fuelPlan: { taxiL: number; returnL: number; reserveL: number; taxiMin?: number; returnMin?: number; resetMin?: number }; // reset: minutes between points, 2 unless stated
   daMaximumFt: number | null;
   configuration: Configuration | null;
   parameters: Parameter[];

@@ -1,11 +1,29 @@
-import type { FindingSeverity, RiskLevel, SortieKind, StepDecision } from "./words";
 import type { CardDocument } from "./card";
 import type { FontWidths } from "./sheet-types";
+import type { FindingSeverity, RiskLevel, SortieKind, StepDecision } from "./words";
 
 /** Where a finding belongs, so that a screen can jump to it. */
 export type FindingPlace =
   | { at: "card"; field?: "title" | "crew" | "fuelOnBoardL" | "bingoL" | "plannedOn" | "points" }
-  | { at: "point"; point: string; field?: "positions" | "entry" | "steps" | "readings" | "limits" | "aborts" | "recovery" | "completion" | "durationMin" | "objectives" | "heightFloor" | "series" | "grid"; item?: string }
+  | {
+      at: "point";
+      point: string;
+      field?:
+        | "positions"
+        | "entry"
+        | "steps"
+        | "readings"
+        | "limits"
+        | "aborts"
+        | "recovery"
+        | "completion"
+        | "durationMin"
+        | "objectives"
+        | "heightFloor"
+        | "series"
+        | "grid";
+      item?: string;
+    }
   | { at: "instrument"; instrument: string }
   | { at: "limit"; limit: string }
   | { at: "hazard"; hazard: string }
@@ -23,7 +41,13 @@ export type CardContext = {
   currentConfiguration: { id: string; number: string; signed: boolean } | null;
   releaser: { id: string; name: string; residualRisk: RiskLevel } | null; // who is about to release, if known
   buildUp: BuildUpState[];
-  seriesResults: { series: string; results: { level: number; value: number }[]; expandedUncertainty: number | null; lastInBand: boolean }[];
+  seriesResults: {
+    series: string;
+    parameter?: string;
+    results: { level: number; value: number }[];
+    expandedUncertainty: number | null;
+    lastInBand: boolean;
+  }[];
   groundingSquawks: { id: string; number: string; text: string }[];
   objectivesCovered: string[]; // by any point of the programme
   digest: string | null; // of this document as assembled now
@@ -35,7 +59,13 @@ export type SortiePlan = {
   id: string;
   kind: SortieKind;
   plannedOn: string;
-  cards: { document: CardDocument; state: string; digest: string | null; releasedDigest: string | null; acceptance: { digest: string; at: string; accepted: boolean } | null }[];
+  cards: {
+    document: CardDocument;
+    state: string;
+    digest: string | null;
+    releasedDigest: string | null;
+    acceptance: { digest: string; at: string; accepted: boolean } | null;
+  }[];
   crew: { name: string; role: string; massKg: number }[];
   baggageKg: number;
   fuelOnBoardL: number | null;

@@ -17,7 +17,7 @@ export type ProgrammeSettings = {
   thenActions: { air: string[]; ground: string[] };
   standingAborts: AbortLine[];
   reactionMin: number;
-  fuelPlan: { taxiL: number; returnL: number; reserveL: number };
+  fuelPlan: { taxiL: number; returnL: number; reserveL: number; taxiMin?: number; returnMin?: number; resetMin?: number };
   daMaximumFt: number | null;
 };
 

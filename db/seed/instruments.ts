@@ -1,0 +1,270 @@
+import type { Instrument } from "@/lib/testcards/card";
+import type { Unit } from "@/lib/testcards/units";
+import { seedId } from "./ids";
+
+type Shown = Instrument["shownOn"];
+export type InstrumentSeed = Omit<Instrument, "calibration"> & {
+  table: [read: number, actual: number][];
+  expandedUncertainty: number;
+  method: string;
+  reference: string;
+};
+
+const FILE_REFERENCE = "Working standards of the instrument shop, file HF-CAL-31";
+const BATH = "Stirred bath against a reference thermometer, in place, engine wiring";
+const TRUE_AT = (...readings: number[]): [number, number][] => readings.map((reading) => [reading, reading]);
+const BOTH: Instrument["visibleTo"] = ["pilot", "observer"];
+
+let count = 0;
+function instrument(
+  name: string,
+  parameter: string,
+  gaugeName: string,
+  unit: Unit,
+  shownOn: Shown,
+  [low, high]: [number, number],
+  markSpacing: number,
+  readable: number,
+  expandedUncertainty: number,
+  table: [number, number][],
+  method: string,
+  visibleTo: Instrument["visibleTo"] = BOTH,
+): InstrumentSeed {
+  count += 1;
+  const id = seedId("instrument", count);
+  return {
+    id,
+    parameter,
+    name,
+    gaugeName,
+    unit,
+    shownOn,
+    visibleTo,
+    low,
+    high,
+    markSpacing,
+    readable,
+    table,
+    expandedUncertainty,
+    method,
+    reference: FILE_REFERENCE,
+  };
+}
+
+/** Tables of the calibration file: indicated, true, in the gauge's unit. Where both agree at every point the gauge reads true. */
+export const INSTRUMENTS: InstrumentSeed[] = [
+  instrument(
+    "COOLANT-PANEL",
+    "coolant",
+    "Coolant",
+    "degC",
+    "panel",
+    [0, 130],
+    5,
+    2.5,
+    3,
+    [
+      [0, -4],
+      [40, 36.5],
+      [80, 79],
+      [100, 101.5],
+      [120, 122.5],
+    ],
+    BATH,
+  ),
+  instrument("COOLANT-REPEATER", "coolant", "Repeater", "degC", "repeater", [0, 150], 0.1, 0.1, 1.5, TRUE_AT(0, 50, 90, 125), BATH),
+  instrument(
+    "CHT-PANEL",
+    "cht",
+    "CHT",
+    "degF",
+    "panel",
+    [100, 400],
+    10,
+    5,
+    6,
+    [
+      [100, 97],
+      [200, 199],
+      [300, 303],
+      [350, 355],
+    ],
+    "Dry block against a reference thermometer, four probes, in place",
+  ),
+  instrument("OIL-T", "oil-t", "Oil T", "degC", "panel", [0, 150], 10, 5, 4, TRUE_AT(0, 60, 100, 130), BATH),
+  instrument(
+    "TIT",
+    "tit",
+    "TIT",
+    "degC",
+    "panel",
+    [0, 1100],
+    20,
+    10,
+    10,
+    TRUE_AT(500, 700, 850, 950),
+    "Furnace against a reference thermocouple",
+  ),
+  instrument("IAT", "iat", "IAT", "degC", "panel", [-30, 100], 5, 2.5, 2, TRUE_AT(0, 30, 50, 80), BATH),
+  instrument(
+    "OIL-P",
+    "oil-p",
+    "Oil P",
+    "psi",
+    "panel",
+    [0, 120],
+    5,
+    2.5,
+    3,
+    TRUE_AT(0, 30, 60, 80, 110),
+    "Dead-weight tester at the sender",
+  ),
+  instrument(
+    "FUEL-P",
+    "fuel-p",
+    "Fuel P",
+    "bar",
+    "panel",
+    [0, 6],
+    0.2,
+    0.1,
+    0.1,
+    TRUE_AT(2, 2.6, 3.2, 3.8),
+    "Dead-weight tester at the sender",
+  ),
+  instrument(
+    "RPM",
+    "rpm",
+    "RPM",
+    "rpm",
+    "panel",
+    [0, 3300],
+    50,
+    10,
+    20,
+    TRUE_AT(800, 1800, 2600, 2800),
+    "Optical tachometer, engine running",
+  ),
+  instrument("MAP", "map", "MAP", "inHg", "panel", [5, 40], 0.5, 0.25, 0.4, TRUE_AT(15, 22, 29, 32), "Reference barometer and vacuum pump"),
+  instrument(
+    "ASI",
+    "ias",
+    "IAS",
+    "kt",
+    "panel",
+    [0, 150],
+    2,
+    1,
+    2,
+    TRUE_AT(20, 60, 100, 140),
+    "Water manometer at the pitot, static to cabin",
+  ),
+  instrument(
+    "ALT",
+    "altitude",
+    "Height",
+    "ft",
+    "panel",
+    [-200, 13000],
+    20,
+    10,
+    50,
+    TRUE_AT(0, 3000, 7000, 12000),
+    "Reference barometer and vacuum pump",
+  ),
+  instrument("OAT", "oat", "OAT", "degC", "panel", [-30, 50], 1, 1, 1, TRUE_AT(-20, 0, 20, 45), BATH),
+  instrument("LOGGER-SKIN", "skin", "Skin", "degC", "recorder", [0, 150], 0.1, 0.1, 3, TRUE_AT(0, 50, 90, 120), BATH, ["observer"]),
+  instrument("LOGGER-LINE", "line", "Fuel line", "degC", "recorder", [0, 100], 0.1, 0.1, 2, TRUE_AT(0, 30, 50, 70), BATH, ["observer"]),
+  instrument(
+    "FUEL-FLOW",
+    "fuel-flow",
+    "Fuel flow",
+    "L/h",
+    "panel",
+    [0, 50],
+    1,
+    0.5,
+    1,
+    TRUE_AT(8, 18, 26, 34),
+    "Timed flow into a measuring can",
+  ),
+  instrument(
+    "FUEL-QTY",
+    "fuel",
+    "Fuel",
+    "L",
+    "panel",
+    [0, 90],
+    5,
+    2.5,
+    4,
+    TRUE_AT(4, 30, 60, 86),
+    "Filled in steps from a measuring can, level",
+  ),
+  instrument(
+    "STOPWATCH",
+    "time",
+    "Stopwatch",
+    "s",
+    "hand held",
+    [0, 36000],
+    0.1,
+    0.1,
+    0.3,
+    TRUE_AT(0, 60, 600, 7200),
+    "Against a time signal",
+  ),
+  instrument(
+    "GPS-SPEED",
+    "ground-speed",
+    "GPS speed",
+    "kt",
+    "hand held",
+    [0, 250],
+    1,
+    1,
+    1,
+    TRUE_AT(0, 40, 100, 160),
+    "Timed run between surveyed points",
+  ),
+  instrument("GPS-TRACK", "track", "GPS track", "deg", "hand held", [0, 360], 1, 1, 2, TRUE_AT(0, 90, 180, 360), "Along a surveyed line"),
+  instrument("CATCH-TANK", "catch-tank", "Catch tank", "mL", "hand held", [0, 1000], 10, 5, 10, TRUE_AT(0, 100, 250, 500), "Weighed water"),
+  instrument("GAP-RULE", "exit-gap", "Gap rule", "mm", "hand held", [0, 200], 1, 0.5, 0.5, TRUE_AT(0, 12, 45, 110, 150), "Gauge blocks"),
+  instrument("SPRING-BALANCE", "lever-force", "Balance", "N", "hand held", [0, 120], 2, 1, 5, TRUE_AT(0, 20, 60, 100), "Hung weights"),
+  instrument(
+    "VIBRATION",
+    "vibration",
+    "Vibration",
+    "mm/s",
+    "panel",
+    [0, 40],
+    1,
+    0.5,
+    1,
+    TRUE_AT(0, 5, 12, 20, 30),
+    "Reference shaker",
+    BOTH,
+  ),
+  instrument("COMPRESSION", "compression", "Held", "psi", "hand held", [0, 100], 2, 1, 1, TRUE_AT(0, 40, 60, 80), "Dead-weight tester"),
+  instrument(
+    "INCLINOMETER",
+    "wing-drop",
+    "Bank",
+    "deg",
+    "panel",
+    [0, 90],
+    5,
+    1,
+    3,
+    TRUE_AT(0, 10, 20, 45),
+    "Levelled table and protractor",
+  ),
+];
+
+const byName = new Map(INSTRUMENTS.map((entry) => [entry.name, entry]));
+
+export function instrumentNamed(name: string): InstrumentSeed {
+  const found = byName.get(name);
+  if (!found) throw new Error(`The demo has no instrument ${name}.`);
+  return found;
+}

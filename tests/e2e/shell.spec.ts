@@ -58,3 +58,20 @@ test("the service worker answers for the debrief alone", async ({ page, baseURL 
   const scopes = await page.evaluate(() => navigator.serviceWorker.getRegistrations().then((all) => all.map((one) => one.scope)));
   expect(scopes).toEqual([`${baseURL}/debrief`]);
 });
+
+test("a page made for one request runs its scripts by that request's nonce", async ({ page }) => {
+  const answer = await page.goto("/sign-in");
+  const nonce = /'nonce-([^']+)' 'strict-dynamic'/.exec(answer?.headers()["content-security-policy"] ?? "")?.[1];
+  expect(nonce).toBeTruthy();
+  const html = (await answer?.text()) ?? "";
+  const scripts = html.match(/<script\b[^>]*>/g) ?? [];
+  expect(scripts.length).toBeGreaterThan(3);
+  expect(scripts.filter((tag) => !tag.includes(`nonce="${nonce}"`))).toEqual([]);
+});
+
+test("an address that leads nowhere says so, and its page keeps to the policy", async ({ page, consoleWatch }) => {
+  consoleWatch.allow(/status of 404/);
+  const answer = await page.goto("/nowhere/at/all");
+  expect(answer?.status()).toBe(404);
+  await expect(page.getByRole("heading", { level: 1 })).toBeVisible();
+});

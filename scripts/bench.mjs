@@ -1,0 +1,4 @@
+import { requireNode } from "./lib/require-node.mjs";
+
+requireNode();
+import("./lib/run-bench.mjs");

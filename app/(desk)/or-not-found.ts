@@ -1,8 +1,8 @@
 import { notFound } from "next/navigation";
 import { Refusal } from "@/lib/workflow/errors";
 
-/** Answers the page for "not found" where a query says that there is no such thing in this team. */
-export function orNotFound<Out>(read: () => Out): Out {
+/** Reads for a page: what is absent, or another team's, becomes the page's "not found". */
+export function orNotFound<T>(read: () => T): T {
   try {
     return read();
   } catch (error) {

@@ -15,7 +15,7 @@ export type DemoSignIn = { email: string; roles: Role[] };
 /** The sign-ins a demo shows; none anywhere else. */
 export function demoSignIns(): { people: DemoSignIn[]; password: string } | null {
   const { GREENARC_DEMO, DEMO_PASSWORD } = env();
-  if (!GREENARC_DEMO) return null;
+  if (!GREENARC_DEMO || !DEMO_PASSWORD) return null;
   const rows = getDb()
     .select({ email: users.email, role: memberRoles.role })
     .from(memberships)

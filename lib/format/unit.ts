@@ -1,26 +1,10 @@
 import type { Band, Quantity } from "@/lib/testcards/card";
+import { unitSymbol } from "@/lib/testcards/unit-symbols";
 import type { Unit } from "@/lib/testcards/units";
 import { decimalsOf, formatNumber, ownDecimals, THIN_SPACE } from "./number";
 
-const PRINTED: Partial<Record<Unit, string>> = {
-  degC: "°C",
-  degF: "°F",
-  degR: "°R",
-  deg: "°",
-  "degC/min": "°C/min",
-  "degF/min": "°F/min",
-  USgal: "US gal",
-  impgal: "imp gal",
-  "USgal/h": "US gal/h",
-  m3: "m³",
-  "m3/s": "m³/s",
-  "1": "",
-};
-
 /** A unit as the trade prints it. */
-export function unitLabel(unit: Unit): string {
-  return PRINTED[unit] ?? unit;
-}
+export const unitLabel = unitSymbol;
 
 /** Puts a unit behind a figure; an angle's degree sign stands close to it. */
 export function withUnit(figure: string, unit: Unit | null): string {

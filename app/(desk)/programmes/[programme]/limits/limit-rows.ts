@@ -1,0 +1,94 @@
+import { formatNumber, ownDecimals } from "@/lib/format/number";
+import { formatOnGauge, formatQuantity, withUnit } from "@/lib/format/unit";
+import { correctReading, readingFor } from "@/lib/testcards/calibration";
+import type { AbortLine, Instrument, Limit, Parameter } from "@/lib/testcards/card";
+import { bandOnGauge, differenceOnGauge, onGauge } from "@/lib/testcards/sheet-layout/gauge-figures";
+import { convert, rateUnitOf, sameDimension } from "@/lib/testcards/units";
+
+type NumberAbort = Extract<AbortLine, { kind: "number" }>;
+export type LimitRow = {
+  key: string;
+  layer: "normal" | "placard" | "card" | "abort";
+  words: string;
+  trueText: string;
+  onGauges: string[];
+  source: string;
+};
+
+const NOT_PROVED = "outside its calibrated range";
+const figure = (value: number) => formatNumber(value, ownDecimals(value));
+
+function gaugeText(limit: Limit, instrument: Instrument): string {
+  if (!sameDimension(limit.unit, instrument.unit)) {
+    const change = differenceOnGauge(limit.value, limit.unit, limit.side, instrument);
+    return withUnit(figure(change), rateUnitOf(instrument.unit) ?? instrument.unit);
+  }
+  return provedText(limit.value, limit, instrument);
+}
+
+/** What prints, or why nothing may: a gauge says nothing outside the range in which it was proved. */
+function provedText(value: number, { unit, side }: Pick<Limit, "unit" | "side">, instrument: Instrument): string {
+  if (!instrument.calibration) return "not calibrated";
+  const { inRange } = readingFor(convert(value, unit, instrument.unit), instrument.calibration);
+  return inRange ? formatOnGauge(onGauge(value, unit, side, instrument), instrument) : NOT_PROVED;
+}
+
+export function normalRow(parameter: Parameter, instruments: Instrument[]): LimitRow[] {
+  const { normal } = parameter;
+  if (!normal) return [];
+  const ends = (low: number | null, high: number | null) => [low, high].map((end) => (end === null ? "…" : figure(end))).join(" to ");
+  return [
+    {
+      key: "normal",
+      layer: "normal",
+      words: "normal range",
+      trueText: withUnit(ends(normal.low, normal.high), normal.unit),
+      onGauges: instruments.map((instrument) => {
+        const { low, high } = bandOnGauge(normal, instrument);
+        return withUnit(ends(low, high), instrument.unit);
+      }),
+      source: "",
+    },
+  ];
+}
+
+const sideWords = { max: "at most", min: "at least" } as const;
+
+function whenWords({ appliesWhen, forS, statistic }: Pick<Limit, "appliesWhen" | "forS" | "statistic">): string {
+  return [
+    statistic === "instant" ? "" : statistic,
+    appliesWhen,
+    forS > 0 ? `may be passed for ${forS >= 60 ? `${figure(forS / 60)} min` : `${figure(forS)} s`}` : "",
+  ]
+    .filter(Boolean)
+    .join(", ");
+}
+
+export function limitRow(limit: Limit, instruments: Instrument[]): LimitRow {
+  return {
+    key: limit.id,
+    layer: limit.layer,
+    words: `${limit.layer}, ${sideWords[limit.side]}, ${whenWords(limit)}`,
+    trueText: formatQuantity({ value: limit.value, unit: limit.unit }),
+    onGauges: instruments.map((instrument) => gaugeText(limit, instrument)),
+    source: limit.source,
+  };
+}
+
+/** A standing abort beside the limits it keeps; the true value is that of the number printed. */
+export function abortRow(line: NumberAbort, parameter: Parameter, instruments: Instrument[]): LimitRow {
+  const own = instruments.find(({ id }) => id === line.instrument);
+  const back = own?.calibration && !line.perMinute ? correctReading(line.onGauge, own.calibration) : null;
+  const trueOfPrinted = own && back?.inRange ? convert(back.value, own.unit, parameter.unit) : null;
+  const window = line.perMinute && line.windowS !== null ? ` in ${figure(line.windowS)} s` : "";
+  return {
+    key: line.id,
+    layer: "abort",
+    words: `abort, ${line.side === "max" ? "at" : "below"}, ${line.perMinute ? "rate, " : ""}${line.appliesWhen}`,
+    trueText: trueOfPrinted === null ? "—" : withUnit(formatNumber(trueOfPrinted, 1), parameter.unit),
+    onGauges: instruments.map((instrument) =>
+      instrument.id === line.instrument ? `${formatOnGauge(line.onGauge, instrument)}${window}` : "—",
+    ),
+    source: `standing, called by the ${line.calledBy}`,
+  };
+}

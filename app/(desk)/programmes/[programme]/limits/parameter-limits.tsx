@@ -1,0 +1,105 @@
+import { ArcStrip } from "@/components/gauge/arc-strip";
+import type { Strip } from "@/components/gauge/strip-layout";
+import { Section } from "@/components/ui/page-header";
+import { Cell, HeadCell, Row, RowHead, Table, TableHead } from "@/components/ui/table";
+import { formatNumber, formatUncertainty, ownDecimals } from "@/lib/format/number";
+import { withUnit } from "@/lib/format/unit";
+import { sentenceCase } from "@/lib/format/words";
+import { correctReading } from "@/lib/testcards/calibration";
+import type { AbortLine, Instrument, Limit, Parameter } from "@/lib/testcards/card";
+import { convert, sameDimension } from "@/lib/testcards/units";
+import { abortRow, type LimitRow, limitRow, normalRow } from "./limit-rows";
+
+type NumberAbort = Extract<AbortLine, { kind: "number" }>;
+const figure = (value: number) => formatNumber(value, ownDecimals(value));
+
+export function ParameterLimits({
+  parameter,
+  limits,
+  instruments,
+  standingAborts,
+}: {
+  parameter: Parameter;
+  limits: Limit[];
+  instruments: Instrument[];
+  standingAborts: AbortLine[];
+}) {
+  const aborts = standingAborts.filter((line): line is NumberAbort => line.kind === "number" && line.parameter === parameter.code);
+  const rows = [
+    ...normalRow(parameter, instruments),
+    ...limits.map((limit) => limitRow(limit, instruments)),
+    ...aborts.map((line) => abortRow(line, parameter, instruments)),
+  ];
+  return (
+    <Section id={parameter.code} title={parameter.name} aside={`hot-day rule: ${parameter.hotDayRule}`}>
+      <ArcStrip title={`${parameter.name}, true`} strip={stripOf(parameter, limits, aborts, instruments)} className="pb-4" />
+      <Table label={`Limits of ${parameter.name}`}>
+        <TableHead>
+          <HeadCell>Layer</HeadCell>
+          <HeadCell figures>True</HeadCell>
+          {instruments.map((instrument) => (
+            <HeadCell key={instrument.id} figures>
+              On the gauge
+              <span className="block font-normal">
+                {instrument.name}
+                {instrument.calibration
+                  ? `, U ${withUnit(formatUncertainty(instrument.calibration.expandedUncertainty, ownDecimals(instrument.calibration.expandedUncertainty ?? 0)), instrument.unit)}`
+                  : ", not calibrated"}
+              </span>
+            </HeadCell>
+          ))}
+          <HeadCell>Source</HeadCell>
+        </TableHead>
+        <tbody>
+          {rows.map((row) => (
+            <LimitLine key={row.key} row={row} />
+          ))}
+        </tbody>
+      </Table>
+    </Section>
+  );
+}
+
+function LimitLine({ row: { layer, words, trueText, onGauges, source } }: { row: LimitRow }) {
+  const [head = "", ...rest] = words.split(", ");
+  return (
+    <Row>
+      <RowHead className="min-w-56">
+        <span className={layer === "normal" ? "" : "font-bold"}>{sentenceCase(head)}</span>
+        {rest.length > 0 ? <span className="text-ink-soft">, {rest.join(", ")}</span> : null}
+      </RowHead>
+      <Cell figures>{trueText}</Cell>
+      {onGauges.map((text, i) => (
+        // biome-ignore lint/suspicious/noArrayIndexKey: one cell an instrument, in the head's order.
+        <Cell key={i} figures className={layer === "abort" ? "font-bold" : ""}>
+          {text}
+        </Cell>
+      ))}
+      <Cell className="min-w-40 text-ink-soft">{source}</Cell>
+    </Row>
+  );
+}
+
+/** The layers that hold in running, on the parameter's own scale; moments of their own stand in the table only. */
+function stripOf(parameter: Parameter, limits: Limit[], aborts: NumberAbort[], instruments: Instrument[]): Strip {
+  const drawn = limits.filter(
+    (limit) =>
+      sameDimension(limit.unit, parameter.unit) && limit.forS === 0 && (limit.appliesWhen === "always" || limit.appliesWhen === "at power"),
+  );
+  return {
+    normal: parameter.normal,
+    limits: [
+      ...drawn.map(({ layer, side, value, unit }) => {
+        const at = convert(value, unit, parameter.unit);
+        return { layer, side, value: at, label: figure(at) };
+      }),
+      ...aborts.flatMap((line) => {
+        const instrument = instruments.find(({ id }) => id === line.instrument);
+        if (!instrument?.calibration || line.perMinute || line.appliesWhen === "idle") return [];
+        const at = convert(correctReading(line.onGauge, instrument.calibration).value, instrument.unit, parameter.unit);
+        return [{ layer: "abort" as const, side: line.side, value: at, label: formatNumber(at, 1) }];
+      }),
+    ],
+    marks: [],
+  };
+}

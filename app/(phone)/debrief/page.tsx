@@ -1,7 +1,7 @@
-import { DebriefApp } from "@/components/debrief/debrief-app";
+import { KeptDebrief } from "./kept-debrief";
 
 export const dynamic = "error"; // a build fails rather than let this page depend on the request
 
 export default function DebriefShell() {
-  return <DebriefApp />;
+  return <KeptDebrief />;
 }

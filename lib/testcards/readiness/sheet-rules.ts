@@ -4,11 +4,14 @@ import { figure } from "./say";
 /** Of the sheet as laid out: smallest type by what is printed. NASA CR-177605's advice, in the team's own sizes. */
 const SMALLEST = { step: 12, entry: 12, recovery: 12, limits: 14, abort: 14 } as const;
 
+/** The heads over the two lists are labels, of label size. */
+const IS_HEAD = /^(limits|abort|if reached|on the gauge(, if any:)?)$/i;
+
 function typeTooSmall(facts: CardFacts): Problem[] {
   const smallest = new Map<keyof typeof SMALLEST, { sizePt: number; page: number }>();
   for (const page of facts.sheet?.pages ?? []) {
     for (const item of page.items) {
-      if (item.kind !== "text" || !(item.role in SMALLEST)) continue;
+      if (item.kind !== "text" || !(item.role in SMALLEST) || IS_HEAD.test(item.text.trim())) continue;
       const role = item.role as keyof typeof SMALLEST;
       if (item.sizePt < SMALLEST[role] - 1e-6 && item.sizePt < (smallest.get(role)?.sizePt ?? Number.POSITIVE_INFINITY))
         smallest.set(role, { sizePt: item.sizePt, page: page.number });

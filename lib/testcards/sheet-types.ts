@@ -6,14 +6,49 @@ export type SheetPaper = "a5" | "half-letter";
 export type FontWidths = { regular: Record<number, number>; bold: Record<number, number>; missing: number };
 
 export type SheetItem =
-  | { kind: "text"; xMm: number; baselineMm: number; text: string; sizePt: number; weight: FontWeight; anchor: "start" | "middle" | "end"; reversed: boolean; role: SheetRole }
+  | {
+      kind: "text";
+      xMm: number;
+      baselineMm: number;
+      text: string;
+      sizePt: number;
+      weight: FontWeight;
+      anchor: "start" | "middle" | "end";
+      reversed: boolean;
+      role: SheetRole;
+      turnDeg?: number;
+    } // turned about its anchor, clockwise; role "watermark" is outlined, not filled
   | { kind: "rect"; xMm: number; yMm: number; widthMm: number; heightMm: number; strokeMm: number; filled: boolean; role: SheetRole }
   | { kind: "line"; x1Mm: number; y1Mm: number; x2Mm: number; y2Mm: number; strokeMm: number; role: SheetRole }
   | { kind: "circle"; xMm: number; yMm: number; radiusMm: number; strokeMm: number; role: SheetRole }
-  | { kind: "cell"; xMm: number; yMm: number; widthMm: number; heightMm: number; strokeMm: number; role: "cell"; reading: string | null; row: number }
+  | {
+      kind: "cell";
+      xMm: number;
+      yMm: number;
+      widthMm: number;
+      heightMm: number;
+      strokeMm: number;
+      role: "cell";
+      reading: string | null;
+      row: number;
+    }
   | { kind: "code"; xMm: number; yMm: number; sizeMm: number; role: "footer" }; // the QR: drawn by the renderer
 
-export type SheetRole = "header" | "limits" | "abort" | "then" | "point" | "entry" | "step" | "recovery" | "grid" | "cell" | "outcome" | "cover" | "footer" | "watermark";
+export type SheetRole =
+  | "header"
+  | "limits"
+  | "abort"
+  | "then"
+  | "point"
+  | "entry"
+  | "step"
+  | "recovery"
+  | "grid"
+  | "cell"
+  | "outcome"
+  | "cover"
+  | "footer"
+  | "watermark";
 
 /** Where one point stands on one page: for dragging on screen and for tests. */
 export type SheetRegion = { point: string; part: number; parts: number; xMm: number; yMm: number; widthMm: number; heightMm: number };

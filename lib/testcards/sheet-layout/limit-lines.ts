@@ -1,0 +1,185 @@
+import { type CardDocument, type CardPoint, instrumentOf, type Limit, type PointLimit, parameterOf } from "../card";
+import { unitSymbol } from "../unit-symbols";
+import { sameDimension, type Unit } from "../units";
+import type { LimitCondition, Side } from "../words";
+import { bandText, differenceOnGauge, figure, onGauge, pilotsGauge, withUnit } from "./gauge-figures";
+
+/** One line of the LIMITS or ABORT list: a gauge's name and the number on it, or words alone. */
+export type ListLine = { name: string; value: string };
+
+/** These conditions make up a parameter's plain line; the others are moments of their own and print with their name. */
+const PLAIN: readonly LimitCondition[] = ["always", "at power", "full power"];
+
+type Row = { limit: Limit; gauge: number };
+type Plain = { low: Row | null; high: Row | null; others: Row[] };
+
+const isPlainStatistic = (limit: Limit) => limit.statistic === "instant" || limit.statistic === "sustained";
+
+/** The tightest layer of each kind: the card's own, or the placard's where the card sets none. */
+export function limitsInForce(limits: readonly Limit[]): Limit[] {
+  const kind = (l: Limit) => [l.parameter, l.side, l.appliesWhen, l.statistic].join("|");
+  const ofCard = new Set(limits.filter((l) => l.layer === "card").map(kind));
+  return limits.filter((l) => l.layer === "card" || !ofCard.has(kind(l)));
+}
+
+/** What the points read, watch or set: the parameters whose limits belong on the sheet. */
+export function parametersOf(card: CardDocument, points: readonly CardPoint[]): Set<string> {
+  const found = new Set<string>();
+  const ofUnit = (unit: Unit) => card.programme.parameters.filter((p) => p.unit === unit).map((p) => p.code);
+  for (const point of points.filter((p) => p.cardTable)) {
+    for (const reading of point.readings) if (reading.parameter !== null) found.add(reading.parameter);
+    for (const line of point.aborts.lines) if (line.kind === "number") found.add(line.parameter);
+    for (const entry of point.entry) found.add(entry.parameter);
+    if (point.aborts.standing) for (const line of card.programme.standingAborts) if (line.kind === "number") found.add(line.parameter);
+    if (point.steps.some((s) => s.rpm !== null)) for (const code of ofUnit("rpm")) found.add(code);
+    if (point.steps.some((s) => s.manifoldPressureInHg !== null)) for (const code of ofUnit("inHg")) found.add(code);
+  }
+  return found;
+}
+
+function rowsOf(card: CardDocument, parameter: string): Row[] {
+  const instrument = pilotsGauge(card, parameter);
+  if (!instrument) return [];
+  return limitsInForce(card.programme.limits)
+    .filter((l) => l.parameter === parameter && isPlainStatistic(l) && sameDimension(l.unit, instrument.unit))
+    .map((limit) => ({ limit, gauge: onGauge(limit.value, limit.unit, limit.side, instrument) }));
+}
+
+const stricter = (side: Side) => (a: Row, b: Row) => (side === "max" ? a.gauge - b.gauge : b.gauge - a.gauge);
+
+function plainOf(rows: readonly Row[]): Plain {
+  const of = (side: Side) => rows.filter((r) => r.limit.side === side).sort(stricter(side));
+  const [high = null, ...looserHigh] = of("max");
+  const [low = null, ...looserLow] = of("min");
+  return { low, high, others: [...looserHigh, ...looserLow].filter((r) => r.gauge !== high?.gauge && r.gauge !== low?.gauge) };
+}
+
+/** Why a looser number stands beside the plain one: for how long the plain one may be passed, else the condition. */
+function label(row: Row, plain: Plain): string {
+  const tight = row.limit.side === "max" ? plain.high : plain.low;
+  const s = tight?.limit.forS ?? 0;
+  if (s === 0) return row.limit.appliesWhen;
+  return s % 60 === 0 ? `${s / 60}\u00a0min` : `${s}\u00a0s`;
+}
+
+type Gauged = { code: string; name: string; unit: Unit; plain: Plain };
+
+function gaugedLines({ name, unit, plain }: Gauged): ListLine[] {
+  const { low, high, others } = plain;
+  const lines: ListLine[] = [];
+  if (low && high) lines.push({ name, value: withUnit(bandText(low.gauge, high.gauge, unit), unit) });
+  else if (high) lines.push({ name, value: withUnit(figure(high.gauge, unit), unit) });
+  else if (low) lines.push({ name, value: `min ${withUnit(figure(low.gauge, unit), unit)}` });
+  for (const row of others) lines.push({ name: label(row, plain), value: `${name} ${sided(row, unit)}` });
+  return lines;
+}
+
+function sided({ limit, gauge }: Row, unit: Unit): string {
+  return `${limit.side === "min" ? "min " : ""}${withUnit(figure(gauge, unit), unit)}`;
+}
+
+const onlyMaxima = ({ plain }: Gauged) => plain.low === null && plain.high !== null;
+const sameShape = (a: Gauged, b: Gauged) =>
+  a.plain.others.map((r) => label(r, a.plain)).join() === b.plain.others.map((r) => label(r, b.plain)).join();
+
+/** RPM and manifold pressure are set together, so they stand on one line: "RPM 2580  MAP 29.0" and "5 min  2730 / 30.5". */
+function powerLines(rpm: Gauged, pressure: Gauged): ListLine[] {
+  const value = (g: Gauged, row: Row | null | undefined) => (row ? figure(row.gauge, g.unit) : "");
+  const first = `${rpm.name} ${value(rpm, rpm.plain.high)}  ${pressure.name} ${value(pressure, pressure.plain.high)}`;
+  const rest = rpm.plain.others.map((row, i) => ({
+    name: label(row, rpm.plain),
+    value: `${value(rpm, row)} / ${value(pressure, pressure.plain.others[i])}`,
+  }));
+  return [{ name: "", value: first }, ...rest];
+}
+
+function plainLines(gauged: readonly Gauged[]): ListLine[] {
+  const rpm = gauged.find((g) => g.unit === "rpm" && onlyMaxima(g));
+  const pressure = gauged.find((g) => g.unit === "inHg" && onlyMaxima(g));
+  const paired = rpm && pressure && sameShape(rpm, pressure);
+  return gauged.flatMap((g) => {
+    if (paired && g === pressure) return [];
+    return paired && g === rpm ? powerLines(rpm, pressure) : gaugedLines(g);
+  });
+}
+
+/** Moments of their own (idle, take-off, cold start), only where one of the page's points has them. */
+function momentLines(card: CardDocument, parameters: ReadonlySet<string>, points: readonly CardPoint[]): ListLine[] {
+  const occurring = new Set(points.filter((p) => p.cardTable).flatMap((p) => p.conditions));
+  return card.programme.parameters
+    .filter((p) => parameters.has(p.code))
+    .flatMap(({ code }) => {
+      const instrument = pilotsGauge(card, code);
+      if (!instrument) return [];
+      return rowsOf(card, code)
+        .filter(({ limit }) => !PLAIN.includes(limit.appliesWhen) && occurring.has(limit.appliesWhen))
+        .map((row) => ({ name: row.limit.appliesWhen, value: `${instrument.gaugeName} ${sided(row, instrument.unit)}` }));
+    });
+}
+
+/** The lowest speed that a position set, or recovered to, allows. Positions carry indicated speeds: no correction. */
+function speedLine(card: CardDocument, points: readonly CardPoint[], listed: readonly Gauged[]): ListLine[] {
+  if (listed.some((g) => g.unit === "kt")) return [];
+  const used = points.filter((p) => p.place === "air" || p.positions.length > 0).flatMap((p) => p.positions);
+  const speeds = card.programme.controls.flatMap((control) =>
+    control.positions
+      .filter((p) => p.name === control.recoverTo || used.some((u) => u.control === control.name && u.position === p.name))
+      .flatMap((p) => (p.maxSpeedKt === null ? [] : [p.maxSpeedKt])),
+  );
+  if (used.length === 0 || speeds.length === 0 || points.every((p) => p.place === "ground")) return [];
+  const airspeed = card.programme.instruments.find((i) => i.unit === "kt" && i.visibleTo.includes("pilot"));
+  return [{ name: airspeed?.gaugeName ?? "IAS", value: withUnit(figure(Math.min(...speeds), "kt"), "kt") }];
+}
+
+/** A point's own limit, turned to the gauge of its reading where it has one. */
+function ownLine(card: CardDocument, point: CardPoint, limit: PointLimit): ListLine {
+  const reading = point.readings.find((r) => r.id === limit.reading);
+  const instrument = instrumentOf(card, reading?.instrument ?? null);
+  const difference = limit.statistic !== "instant" && limit.statistic !== "sustained";
+  const min = limit.side === "min" ? "min " : "";
+  if (!instrument) return { name: limit.label, value: min + withUnit(figure(limit.value, limit.unit), limit.unit) };
+  if (difference && sameDimension(limit.unit, instrument.unit)) {
+    const value = differenceOnGauge(limit.value, limit.unit, limit.side, instrument);
+    return { name: limit.label, value: min + withUnit(figure(value, instrument.unit), instrument.unit) };
+  }
+  const same = sameDimension(limit.unit, instrument.unit);
+  const value = same ? onGauge(limit.value, limit.unit, limit.side, instrument) : limit.value;
+  return { name: limit.label, value: min + withUnit(figure(value, instrument.unit), same ? instrument.unit : limit.unit) };
+}
+
+/** A programme's rate limit prints where a point watches that rate: as the change on the gauge in one minute. */
+function rateLines(card: CardDocument, points: readonly CardPoint[]): ListLine[] {
+  const watched = points.flatMap((p) => p.aborts.lines).flatMap((l) => (l.kind === "number" && l.perMinute ? [l] : []));
+  return limitsInForce(card.programme.limits)
+    .filter((l) => l.statistic === "rate")
+    .flatMap((limit) => {
+      const line = watched.find((w) => w.parameter === limit.parameter && w.side === limit.side);
+      const instrument = line && instrumentOf(card, line.instrument);
+      if (!instrument) return [];
+      const value = differenceOnGauge(limit.value, limit.unit, limit.side, instrument);
+      const name = parameterOf(card, limit.parameter)?.shortName ?? instrument.gaugeName;
+      return [{ name, value: `${figure(value, instrument.unit)}\u00a0${unitSymbol(instrument.unit)} in 60\u00a0s` }];
+    });
+}
+
+/** The LIMITS list of a page, on the gauge: the plain lines of the whole card, then what only this page's points add. */
+export function limitLines(card: CardDocument, points: readonly CardPoint[], onCard: readonly CardPoint[]): ListLine[] {
+  const parameters = parametersOf(card, onCard);
+  const powers = new Set(onCard.flatMap((p) => p.conditions));
+  const occurs = (condition: LimitCondition) => condition === "always" || (PLAIN.includes(condition) && powers.has(condition));
+  const gauged = card.programme.parameters
+    .filter((p) => parameters.has(p.code))
+    .flatMap(({ code }): Gauged[] => {
+      const instrument = pilotsGauge(card, code);
+      if (!instrument) return [];
+      const rows = rowsOf(card, code).filter(({ limit }) => occurs(limit.appliesWhen));
+      return rows.length === 0 ? [] : [{ code, name: instrument.gaugeName, unit: instrument.unit, plain: plainOf(rows) }];
+    });
+  return [
+    ...plainLines(gauged),
+    ...speedLine(card, onCard, gauged),
+    ...momentLines(card, parameters, points),
+    ...rateLines(card, points),
+    ...points.flatMap((point) => point.limits.map((limit) => ownLine(card, point, limit))),
+  ];
+}

@@ -1,0 +1,106 @@
+import type { Metadata } from "next";
+import Link from "next/link";
+import { EmptyState } from "@/components/ui/empty-state";
+import { PageHeader, Section } from "@/components/ui/page-header";
+import { Cell, HeadCell, Row, RowHead, Table, TableHead } from "@/components/ui/table";
+import { requestCtx } from "@/lib/auth/request-ctx";
+import { formatDay, formatInstant } from "@/lib/format/time";
+import { countOf } from "@/lib/format/words";
+import { may, whoMay } from "@/lib/workflow/permissions";
+import { listSorties } from "@/lib/workflow/sortie/queries";
+import { listSquawks, type SquawkListItem } from "@/lib/workflow/squawk/queries";
+import { orNotFound } from "../../../or-not-found";
+import { raiseSquawkAction } from "./actions";
+import { RaiseSquawkForm } from "./raise-squawk-form";
+import { SeverityMark } from "./severity-mark";
+
+export const metadata: Metadata = { title: "Squawks" };
+
+const ENDED = ["verified", "closed"];
+
+export default async function SquawksPage({ params }: { params: Promise<{ programme: string }> }) {
+  const [{ db, actor }, { programme: id }] = await Promise.all([requestCtx(), params]);
+  const squawks = orNotFound(() => listSquawks(db, actor, id));
+  const open = squawks.filter(({ state }) => !ENDED.includes(state));
+  const grounding = open.filter(({ severity }) => severity === "grounding");
+  const sorties = listSorties(db, actor, id).map(({ id: sortieId, number, kind, plannedOn }) => ({
+    id: sortieId,
+    label: `Sortie ${number}, ${kind}, ${formatDay(plannedOn)}`,
+  }));
+  return (
+    <main className="mx-auto w-full max-w-6xl grow px-4 py-8 desk:px-6">
+      <PageHeader
+        title="Squawks"
+        lead={
+          grounding.length > 0
+            ? `${countOf(grounding.length, "grounding squawk")} open: no card is released and no sortie briefed until cleared.`
+            : `${countOf(open.length, "squawk")} open. None of them is grounding.`
+        }
+      />
+      {squawks.length === 0 ? (
+        <EmptyState title="No squawks">
+          What was seen on the aircraft and must be looked at stands here. The debrief raises them; anybody who works on the aircraft may
+          too.
+        </EmptyState>
+      ) : (
+        <SquawkTable squawks={squawks} programmeId={id} />
+      )}
+      <div className="pt-10">
+        <Section id="raise" title="Raise a squawk">
+          {may(actor, "raise a squawk") ? (
+            <RaiseSquawkForm action={raiseSquawkAction.bind(null, id)} sorties={sorties} />
+          ) : (
+            <p className="text-ink-soft">{whoMay("raise a squawk")}</p>
+          )}
+        </Section>
+      </div>
+    </main>
+  );
+}
+
+function SquawkTable({ squawks, programmeId }: { squawks: SquawkListItem[]; programmeId: string }) {
+  return (
+    <Table label="Squawks">
+      <TableHead>
+        <HeadCell figures>No.</HeadCell>
+        <HeadCell>Severity</HeadCell>
+        <HeadCell>What was seen</HeadCell>
+        <HeadCell>State</HeadCell>
+        <HeadCell>From</HeadCell>
+        <HeadCell>Raised</HeadCell>
+      </TableHead>
+      <tbody>
+        {squawks.map((squawk) => (
+          <Row key={squawk.id} id={`squawk-${squawk.number}`}>
+            <Cell figures>{squawk.number}</Cell>
+            <Cell>
+              <SeverityMark severity={squawk.severity} ended={ENDED.includes(squawk.state)} />
+            </Cell>
+            <RowHead className="min-w-64">
+              <span className="font-bold">{squawk.system}</span> <span className="[overflow-wrap:anywhere]">{squawk.text}</span>
+            </RowHead>
+            <Cell className="whitespace-nowrap">
+              {squawk.state}
+              {squawk.disposition ? <span className="block text-ink-soft text-sm">{squawk.disposition}</span> : null}
+            </Cell>
+            <Cell className="whitespace-nowrap">
+              {squawk.sortieId ? (
+                <Link href={`/programmes/${programmeId}/sorties/${squawk.sortieId}`} className="link inline-block py-1">
+                  Sortie {squawk.sortieNumber}
+                </Link>
+              ) : (
+                "a person"
+              )}
+            </Cell>
+            <Cell className="min-w-40">
+              {formatInstant(squawk.raisedAt)}
+              <span className="block text-ink-soft text-sm">
+                {squawk.raisedFrom === "exceedance" ? "by the check of readings" : squawk.raisedByName}
+              </span>
+            </Cell>
+          </Row>
+        ))}
+      </tbody>
+    </Table>
+  );
+}

@@ -1,9 +1,8 @@
 /** Comparison (i): the gauge against the number to abort at. It says whether a call was due; a call is never questioned. */
 import { type AbortLine, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf, type Reading } from "./card";
-import { extremeOf, rawRows, speaksFor } from "./check-gauge";
+import { converted, extremeOf, rawRows, speaksFor } from "./check-gauge";
 import { clock } from "./check-limits";
 import type { AbortCall, CheckLine, Debrief, DisciplineLine, PointDebrief, ReadingEntry } from "./debrief-types";
-import { convert, sameDimension } from "./units";
 import { abortDiscipline, largestFall } from "./verdict";
 
 type NumberLine = Extract<AbortLine, { kind: "number" }>;
@@ -62,10 +61,9 @@ function watches(reading: Reading, line: NumberLine): boolean {
 
 function worstRead(card: CardDocument, line: NumberLine, reading: Reading, entry: ReadingEntry | null): number | null {
   const unit = instrumentOf(card, reading.instrument)?.unit;
-  const turn = (value: number) => (entry?.unit && unit && sameDimension(entry.unit, unit) ? convert(value, entry.unit, unit) : value);
   if (line.perMinute) return entry && fallOnGauge(entry, line.windowS ?? 60);
   const raw = extremeOf(reading, entry, line.side);
-  return raw && turn(raw.value);
+  return raw && (entry?.unit && unit ? converted(raw.value, entry.unit, unit) : raw.value);
 }
 
 /** Largest fall on the gauge over the window, raw; null where the rows are too few or too far apart to show it. */

@@ -1,6 +1,6 @@
 /** One debrief against one card: every line, what it means for its point, and what follows for the next step. */
 
-import { amended } from "./amend-debrief";
+import { debriefAsJudged } from "./amend-debrief";
 import { decideAfterFlight } from "./buildup";
 import type { CardDocument, CardPoint } from "./card";
 import { abortReport } from "./check-abort";
@@ -26,28 +26,32 @@ export const CORE_VERSION = "1";
  * Throws    nothing on well-formed input. What is missing gives "no verdict" with its reason, never a pass.
  */
 export function checkDebrief(card: CardDocument, debrief: Debrief, context: CheckContext): CheckReport {
-  const judgedOn = amended(card, debrief, context.amendments);
-  const checked = card.content.points.map((point) => checkPoint(card, point, judgedOn, context));
+  const judged = debriefAsJudged(card, debrief, context.amendments);
+  const checked = card.content.points.map((point) => checkPoint(card, point, judged, context));
   const lines = checked.flatMap((one) => one.lines);
-  const points = checked.map((one) => one.report);
+  const squawks = squawksOf(card, lines, judged);
+  const groundingOpen = context.groundingOpen || squawks.some((squawk) => squawk.severity === "grounding");
+  const points = checked.map((one) => ({ ...one.report, ...decide(one, context, groundingOpen) }));
   return {
     coreVersion: CORE_VERSION,
     card: { id: card.identity.id, number: card.identity.number, letter: card.identity.letter },
     basis: card.programme.hotDayBasis,
     lines,
     points,
-    findings: findingsOf(card, judgedOn, lines, points),
-    squawks: squawksOf(card, lines, judgedOn, card.content.points),
+    findings: findingsOf(card, judged, context, lines, points),
+    squawks,
     ...overall(card, points),
   };
 }
 
-function checkPoint(
-  card: CardDocument,
-  point: CardPoint,
-  debrief: Debrief,
-  context: CheckContext,
-): { report: PointReport; lines: CheckLine[] } {
+type Checked = {
+  report: Omit<PointReport, "decision" | "because">;
+  lines: CheckLine[];
+  counting: Verdict[];
+  withheld: Subject["withheld"];
+};
+
+function checkPoint(card: CardDocument, point: CardPoint, debrief: Debrief, context: CheckContext): Checked {
   const said = debrief.points.find((candidate) => candidate.point === point.id) ?? null;
   const completion = completionOf(card, point, said, context);
   const withheld = withheldOn(card, point, said, context);
@@ -65,28 +69,36 @@ function checkPoint(
     ),
   ]);
   const counting = verdictsThatCount(lines);
-  const surprises = subjects.flatMap((subject) => outsideExpected(subject) ?? []);
-  const dispositions = context.dispositions.filter((one) => one.point === point.id).map((one) => one.disposition);
-  const decided = decideAfterFlight({
-    start: context.starts?.find((one) => one.point === point.id)?.decision ?? "clear to next step",
-    verdicts: counting,
-    disciplines: aborts.disciplines.map(({ discipline }) => discipline),
-    dispositions,
-    outcomes: [said?.outcome ?? null],
-    groundingOpen: context.groundingOpen || squawksOf(card, lines, debrief, [point]).some((squawk) => squawk.severity === "grounding"),
-    outsideExpected: surprises.length > 0,
-  });
-  const report: PointReport = {
+  const report = {
     point: point.id,
     outcome: said?.outcome ?? null,
     completion: completion.point.reason,
     completionWhy: completion.point.why,
-    worst: counting.length === 0 ? "no verdict" : worst(counting),
+    worst: counting.length === 0 ? ("no verdict" as const) : worst(counting),
     disciplines: aborts.disciplines,
-    outsideExpected: surprises,
-    ...decided,
+    outsideExpected: subjects.flatMap((subject) => outsideExpected(subject) ?? []),
   };
-  return { report, lines };
+  return { report, lines, counting, withheld };
+}
+
+function decide(
+  { report, counting, withheld }: Checked,
+  context: CheckContext,
+  groundingOpen: boolean,
+): Pick<PointReport, "decision" | "because"> {
+  const decided = decideAfterFlight({
+    start: context.starts?.find((one) => one.point === report.point)?.decision ?? "clear to next step",
+    verdicts: counting,
+    disciplines: report.disciplines.map(({ discipline }) => discipline),
+    dispositions: context.dispositions.filter((one) => one.point === report.point).map((one) => one.disposition),
+    outcomes: [report.outcome],
+    groundingOpen,
+    outsideExpected: report.outsideExpected.length > 0,
+  });
+  if (withheld.length === 0) return decided;
+  // off condition, or in another configuration, a point says nothing about the step on its card, whatever its rule
+  const why = withheld.map((one) => one.why);
+  return { decision: "hold", because: decided.decision === "hold" ? [...decided.because, ...why] : why };
 }
 
 /** Whatever is required, and whatever was found against a limit although nobody had to look. */

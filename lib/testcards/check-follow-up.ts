@@ -43,12 +43,7 @@ export function withheldOn(card: CardDocument, point: CardPoint, said: PointDebr
 }
 
 /** As flown past an engine or aircraft placard grounds; past a programme limit, or marginal against a placard, comes before the next test. */
-export function squawksOf(
-  card: CardDocument,
-  lines: readonly CheckLine[],
-  debrief: Debrief,
-  points: readonly CardPoint[],
-): SuggestedSquawk[] {
+export function squawksOf(card: CardDocument, lines: readonly CheckLine[], debrief: Debrief): SuggestedSquawk[] {
   const found = new Map<string, SuggestedSquawk>();
   for (const line of lines) {
     if (!line.limit || (line.comparison !== "as flown, card" && line.comparison !== "as flown, placard")) continue;
@@ -61,7 +56,7 @@ export function squawksOf(
     if (known && (known.severity === "grounding" || severity !== "grounding")) continue;
     found.set(`${line.point} ${line.reading}`, { point: line.point, reading: line.reading, severity, text: squawkText(card, line) });
   }
-  for (const point of points) {
+  for (const point of card.content.points) {
     const called = debrief.safety.calls.find((call) => call.point === point.id && call.word !== "terminate");
     const aborted = called || debrief.points.some((said) => said.point === point.id && said.outcome === "aborted");
     if (!aborted || [...found.values()].some((squawk) => squawk.point === point.id)) continue;
@@ -83,7 +78,13 @@ function squawkText(card: CardDocument, { limit, asTrue, verdict, parameter, not
 
 const figure = (value: number): string => `${value < 0 ? "−" : ""}${Math.abs(value).toFixed(1)}`;
 
-export function findingsOf(card: CardDocument, debrief: Debrief, lines: readonly CheckLine[], reports: readonly PointReport[]): Finding[] {
+export function findingsOf(
+  card: CardDocument,
+  debrief: Debrief,
+  context: CheckContext,
+  lines: readonly CheckLine[],
+  reports: readonly PointReport[],
+): Finding[] {
   const { id, number, letter } = card.identity;
   const findings: Finding[] = [];
   const flown = debrief.revisionsFlown.find((candidate) => candidate.card === id);
@@ -97,6 +98,11 @@ export function findingsOf(card: CardDocument, debrief: Debrief, lines: readonly
         "revision-mismatch",
         `Card ${number}: revision ${flown.letter} was flown, ${letter} is in force and is judged on. Compare the two.`,
       ),
+    );
+  const { configuration } = card.programme;
+  if (configuration && context.configurationId === null)
+    findings.push(
+      atSortie("configuration-not-stated", `The sortie names no configuration; the card is for ${configuration.number}. State it.`),
     );
   const past = lines.some((line) => line.comparison !== "abort" && line.comparison !== "hot day, placard" && line.verdict === "exceeded");
   if (debrief.safety.limitExceeded === false && past)
@@ -122,6 +128,10 @@ function pointFindings(point: CardPoint, debrief: Debrief, lines: readonly Check
     message,
     where: { at: "point", point: point.id, field: "readings", item },
   });
+  const unstated = said && said.outcome !== null && said.outcome !== "skipped" && said.onCondition === null;
+  const condition = unstated
+    ? [at("condition-not-stated", "The pilot did not say whether the point was on condition: ask.", "on condition")]
+    : [];
   const label = (id: string) => point.readings.find((reading) => reading.id === id)?.label ?? id;
   const surprising = report.outsideExpected.map(({ reading }) => {
     const confirmed = said?.readings.find((entry) => entry.reading === reading)?.asRead === true;
@@ -146,5 +156,5 @@ function pointFindings(point: CardPoint, debrief: Debrief, lines: readonly Check
   const unusual = [...strange].map((reading) =>
     at("outside-normal", `${label(reading)} is inside its limit but outside its normal range: answer in one line.`, reading),
   );
-  return [...surprising, ...changed, ...unusual];
+  return [...condition, ...surprising, ...changed, ...unusual];
 }

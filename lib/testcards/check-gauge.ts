@@ -79,11 +79,13 @@ export function correct(read: number, gauge: Gauge, unit: Unit, ownU: number | n
   if (!Number.isFinite(read) || !sameDimension(gauge.unit, unit)) return null;
   if (gauge.instrument === null) {
     const expandedUncertainty = ownU ?? (isCount ? 0 : null);
-    return { value: convert(read, gauge.unit, unit), expandedUncertainty, unit, slope: 1, beyond: null, reasons: [] };
+    const value = converted(read, gauge.unit, unit);
+    return value === null ? null : { value, expandedUncertainty, unit, slope: 1, beyond: null, reasons: [] };
   }
   const { calibration } = gauge;
-  if (calibration === null) return null;
-  const corrected = correctReading(convert(read, gauge.unit, calibration.unit), calibration);
+  const onTable = calibration === null ? null : converted(read, gauge.unit, calibration.unit);
+  if (calibration === null || onTable === null) return null;
+  const corrected = correctReading(onTable, calibration);
   const u = corrected.expandedUncertainty;
   return {
     value: convert(corrected.value, calibration.unit, unit),
@@ -93,6 +95,15 @@ export function correct(read: number, gauge: Gauge, unit: Unit, ownU: number | n
     beyond: corrected.beyond,
     reasons: [...gauge.reasons, ...(corrected.beyond === null ? [] : (["outside calibrated range"] as const))],
   };
+}
+
+/** Null for what no unit can hold, such as a temperature below absolute zero. */
+export function converted(value: number, from: Unit, to: Unit): number | null {
+  try {
+    return convert(value, from, to);
+  } catch {
+    return null;
+  }
 }
 
 /** One raw figure with its moment. `row` is its place among the rows of a series, else −1. */

@@ -3,7 +3,7 @@ import { hotDayAmbient, pressureAltitudeFromQnh } from "./atmosphere";
 import { type CardPoint, parameterOf, type Reading } from "./card";
 import { emptyLine, judged, normalIn, noVerdict, type Subject, whyOf } from "./check-as-flown";
 import type { Completion } from "./check-completion";
-import { type Corrected, correct, extremeOf, type Gauge, momentOf, onTheDay, type Raw, rawRows, speaksFor } from "./check-gauge";
+import { type Corrected, converted, correct, extremeOf, type Gauge, momentOf, onTheDay, type Raw, rawRows, speaksFor } from "./check-gauge";
 import type { AppliedLimit } from "./check-limits";
 import { hotDayTemperature } from "./cooling";
 import { OUTSIDE_AIR, outsideAirGauge, PRESSURE_ALTITUDE } from "./debrief";
@@ -146,15 +146,22 @@ function airAt(subject: Subject, raw: Raw): Air | NoAir {
   const measured =
     holder?.oat ??
     sameMoment(subject, raw, OUTSIDE_AIR) ??
-    (point.place === "ground" && weather ? convert(weather.value, weather.unit, instrument?.unit ?? "degC") : null);
+    (point.place === "ground" && weather ? converted(weather.value, weather.unit, instrument?.unit ?? "degC") : null);
   if (measured === null) return { reason: "no reading", why: "no outside air temperature at that moment" };
   const altitudeFt =
     point.place === "ground" ? groundAltitudeFt(subject) : (holder?.altitudeFt ?? sameMoment(subject, raw, PRESSURE_ALTITUDE));
   if (altitudeFt === null)
     return { reason: "no reading", why: point.place === "ground" ? "no QNH for the height of the ground" : "no height at that moment" };
-  if (!gauge) return { kelvin: convert(measured, "degC", "K"), expandedUncertaintyK: null, unit: "degC", altitudeFt, reasons: [], why: "" };
+  if (!gauge) {
+    const kelvin = converted(measured, "degC", "K");
+    if (kelvin === null) return { reason: "no reading", why: "the outside air temperature cannot be right" };
+    return { kelvin, expandedUncertaintyK: null, unit: "degC", altitudeFt, reasons: [], why: "no gauge for outside air is listed" };
+  }
   const corrected = correct(measured, gauge, "K");
-  if (!corrected) return { reason: "not calibrated", why: gauge.why };
+  if (!corrected)
+    return gauge.calibration
+      ? { reason: "no reading", why: "the outside air temperature cannot be right" }
+      : { reason: "not calibrated", why: gauge.why };
   if (corrected.beyond !== null)
     return { reason: "outside calibrated range", why: `outside air is beyond the table of ${gauge.instrument?.name ?? "its gauge"}` };
   const { value: kelvin, expandedUncertainty: expandedUncertaintyK, reasons } = corrected;

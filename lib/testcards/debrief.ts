@@ -6,7 +6,7 @@
 import { gaugeLimit } from "./calibration";
 import { type CardDocument, type CardPoint, type Instrument, instrumentOf, parameterOf, type Reading } from "./card";
 import type { DebriefField, DebriefTimes, FieldPart, ReadingEntry } from "./debrief-types";
-import { convert } from "./units";
+import { convert, sameDimension } from "./units";
 import { OUTCOMES, type Side, type SortieKind } from "./words";
 
 /** The one parameter code the core must know: the hot-day rule needs the outside air temperature and its gauge. */
@@ -57,8 +57,9 @@ function field(draft: Draft): DebriefField {
   };
 }
 
-export function debriefModel(card: CardDocument): DebriefField[] {
-  return [...flightFields(card), ...safetyFields(), ...card.content.points.flatMap((point) => pointFields(card, point))];
+/** `kind` is the sortie's; it decides which times are asked. A ground run is never asked for a take-off. */
+export function debriefModel(card: CardDocument, kind: SortieKind = card.content.kind): DebriefField[] {
+  return [...flightFields(card, kind), ...safetyFields(), ...card.content.points.flatMap((point) => pointFields(card, point))];
 }
 
 /** The gauge that outside air is read on: the point's own, else one on the panel, else any. */
@@ -68,8 +69,8 @@ export function outsideAirGauge(card: CardDocument, point: CardPoint | null): In
   return instrumentOf(card, own?.instrument ?? null) ?? gauges.find((gauge) => gauge.shownOn === "panel") ?? gauges[0];
 }
 
-function flightFields(card: CardDocument): DebriefField[] {
-  const { identity, content, programme } = card;
+function flightFields(card: CardDocument, kind: SortieKind): DebriefField[] {
+  const { identity, programme } = card;
   const flight = (draft: Omit<Draft, "section">) => field({ section: "flight", ...draft });
   const oat = outsideAirGauge(card, null);
   const oatUnit = oat?.unit ?? "degC";
@@ -92,9 +93,7 @@ function flightFields(card: CardDocument): DebriefField[] {
       kind: "choice",
       choices: [identity.letter, "other"],
     }),
-    ...TIMES_OF[content.kind].map(({ key, label }) =>
-      flight({ key: `times.${key}`, part: "time", label: `${label}, UTC`, kind: "time of day" }),
-    ),
+    ...TIMES_OF[kind].map(({ key, label }) => flight({ key: `times.${key}`, part: "time", label: `${label}, UTC`, kind: "time of day" })),
     fuel("start", "Fuel at start"),
     fuel("end", "Fuel at end"),
     fuel("uplift", "Fuel uplift"),
@@ -232,9 +231,13 @@ function heightRange(card: CardDocument): { low: number; high: number; step: num
 function expectedOnGauge(reading: Reading, instrument: Instrument | undefined): DebriefField["expected"] {
   const band = reading.expected;
   if (!band) return null;
-  if (!instrument) return { low: band.low, high: band.high };
+  if (!instrument) {
+    const { unit } = reading;
+    const turn = (value: number | null) => (value === null || unit === null ? value : convert(value, band.unit, unit));
+    return unit !== null && !sameDimension(unit, band.unit) ? null : { low: turn(band.low), high: turn(band.high) };
+  }
   const { calibration, readable, unit } = instrument;
-  if (!calibration) return null;
+  if (!calibration || !sameDimension(band.unit, unit)) return null;
   const mark = (value: number | null, side: Side) => {
     if (value === null) return null;
     const turned = gaugeLimit({ limit: convert(value, band.unit, unit), side, calibration, readable });

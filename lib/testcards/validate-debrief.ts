@@ -13,7 +13,7 @@ const FUEL_UNITS: readonly Unit[] = ["L", "USgal", "impgal", "kg"];
 const QNH_INHG = { low: 27.8, high: 31 };
 
 export function validateDebrief(card: CardDocument, debrief: Debrief, options: ValidateOptions = {}): FieldError[] {
-  const fields = new Map(debriefModel(card).map((field) => [field.key, field]));
+  const fields = new Map(debriefModel(card, debrief.kind).map((field) => [field.key, field]));
   return [
     ...timeErrors(debrief),
     ...fuelErrors(card, debrief),
@@ -136,6 +136,11 @@ function entryErrors(point: string, said: PointDebrief, entry: ReadingEntry, fie
     errors.push({ key: path("lowest"), message: "The lowest is above the highest: check both." });
   if (entry.atS !== null && said.ranForS !== null && entry.atS > said.ranForS)
     errors.push({ key: path("atS"), message: "This moment lies after the point had ended: check it and the time run." });
+  if (entry.sameMomentAs !== null && !said.readings.some(({ reading }) => reading === entry.sameMomentAs && reading !== entry.reading))
+    errors.push({
+      key: path("atS"),
+      message: "The reading that shares this moment is not on this point: choose another, or give the time.",
+    });
   if (entry.answer !== null) {
     const asked = fields.get(path("answer"));
     if (asked && asked.choices.length > 0 && !asked.choices.includes(entry.answer))

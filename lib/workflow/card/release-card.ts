@@ -37,7 +37,7 @@ export const releaseCard = defineUseCase({
     const digest = sha256(document);
     const at = ctx.now.toISOString();
     const superseded = supersedeEarlier(tx, ctx, open.card.id, revision.letter);
-    const code = toSheetCode(randomBytes(10));
+    const code = toSheetCode((ctx.randomBytes ?? randomBytes)(10));
     updateRevision(tx, revision, {
       state: "released",
       document,

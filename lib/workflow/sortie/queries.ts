@@ -1,17 +1,6 @@
-import { and, asc, desc, eq, isNull, sql } from "drizzle-orm";
+import { asc, desc, eq, sql } from "drizzle-orm";
 import type { Db, Tx } from "@/db/open";
-import {
-  cardRevisions,
-  cards,
-  checkReports,
-  debriefs,
-  pointDispositions,
-  sortieCards,
-  sortieCrew,
-  sorties,
-  stepDecisions,
-  users,
-} from "@/db/schema";
+import { cardRevisions, cards, checkReports, debriefs, sortieCards, sortieCrew, sorties, stepDecisions, users } from "@/db/schema";
 import type { Actor } from "@/lib/auth/roles";
 import { reviewSortie } from "@/lib/testcards/readiness";
 import type { Finding, SortieContext, SortiePlan } from "@/lib/testcards/readiness-types";
@@ -19,6 +8,7 @@ import { getReadinessFacts } from "../card/context";
 import { Refusal } from "../errors";
 import { getProgramme } from "../programme/queries";
 import { listSortieSquawks } from "../squawk/queries";
+import { listDispositions } from "./dispositions";
 import * as policy from "./policy";
 import { getSortieRow, listCrew, listSortieCards, type SortieCard, type SortieRow, toSortiePlan } from "./rows";
 
@@ -126,28 +116,12 @@ export function getSortieResults(db: Reader, actor: Actor, sortieId: string, { v
     squawks: listSortieSquawks(db, sortieId),
     dispositions: listDispositions(db, sortieId),
     decisions: listSortieDecisions(db, sortieId),
+    /** What happened may always be entered; that it was flown without a brief stays visible. */
+    flownUnbriefed: sortie.briefedAt === null,
     may: { dispose: policy.mayDisposePoint(actor, sortie), proposeStep: policy.mayProposeStep(actor, sortie) },
   };
 }
 export type SortieResults = ReturnType<typeof getSortieResults>;
-
-/** The disposition in force of each point. */
-export function listDispositions(db: Reader, sortieId: string) {
-  return db
-    .select({
-      revisionId: pointDispositions.revisionId,
-      pointId: pointDispositions.pointId,
-      disposition: pointDispositions.disposition,
-      why: pointDispositions.why,
-      decidedByName: users.name,
-      decidedAt: pointDispositions.decidedAt,
-    })
-    .from(pointDispositions)
-    .innerJoin(users, eq(users.id, pointDispositions.decidedBy))
-    .where(and(eq(pointDispositions.sortieId, sortieId), isNull(pointDispositions.supersededAt)))
-    .orderBy(asc(pointDispositions.decidedAt))
-    .all();
-}
 
 function listSortieDecisions(db: Reader, sortieId: string) {
   return db

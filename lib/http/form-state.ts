@@ -9,7 +9,9 @@ export const EMPTY_FORM: FormState = { message: null, fieldErrors: {}, values: {
 export function toFormState(error: unknown, form: FormData, secret: string[] = ["password"]): FormState {
   const problem = toProblem(error);
   if (!problem) throw error;
-  const values = Object.fromEntries([...form].filter((entry): entry is [string, string] => typeof entry[1] === "string" && !secret.includes(entry[0])));
+  const values = Object.fromEntries(
+    [...form].filter((entry): entry is [string, string] => typeof entry[1] === "string" && !secret.includes(entry[0])),
+  );
   const fieldErrors = Object.fromEntries((problem.errors ?? []).map(({ path, message }) => [path, message]));
   return { message: problem.detail, fieldErrors, values };
 }

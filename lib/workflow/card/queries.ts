@@ -163,6 +163,7 @@ export function getSheetSource(db: Reader, actor: Actor, cardId: string, letter:
   return {
     card,
     revisionId: revision.id,
+    updatedAt: revision.updatedAt,
     state: revision.state,
     digest: revision.digest ?? digestOf(document),
     document,

@@ -4,7 +4,6 @@ import { debriefs, sorties, squawks } from "@/db/schema";
 import type { AuditEntry } from "@/lib/audit/append-audit";
 import type { Debrief, FieldError } from "@/lib/testcards/debrief-types";
 import { validateDebrief } from "@/lib/testcards/validate-debrief";
-import type { Ctx } from "../context";
 import { digestOf } from "../digest";
 import { Refusal } from "../errors";
 import { getSortieRow, listSortieCards, type SortieCard, type SortieRow } from "../sortie/rows";

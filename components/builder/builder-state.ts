@@ -7,7 +7,7 @@ export type SaveState =
   | { kind: "saving" }
   | { kind: "retrying"; why: string }
   | { kind: "refused"; why: string; errors: { path: string; message: string }[] }
-  | { kind: "stale"; theirs: CardContent; theirVersion: number; by: string | null };
+  | { kind: "stale"; theirs: CardContent; theirVersion: number };
 
 export type BuilderState = {
   content: CardContent;
@@ -32,7 +32,7 @@ export type BuilderAction =
   | { type: "saved"; version: number; edits: number }
   | { type: "save failed"; why: string }
   | { type: "save refused"; why: string; errors: { path: string; message: string }[] }
-  | { type: "stale"; theirs: CardContent; theirVersion: number; by: string | null }
+  | { type: "stale"; theirs: CardContent; theirVersion: number }
   | { type: "take theirs" }
   | { type: "keep mine" };
 
@@ -107,7 +107,7 @@ export function build(state: BuilderState, action: BuilderAction): BuilderState 
     case "save refused":
       return { ...state, save: { kind: "refused", why: action.why, errors: action.errors } };
     case "stale":
-      return { ...state, save: { kind: "stale", theirs: action.theirs, theirVersion: action.theirVersion, by: action.by } };
+      return { ...state, save: { kind: "stale", theirs: action.theirs, theirVersion: action.theirVersion } };
     case "take theirs": {
       if (state.save.kind !== "stale") return state;
       const { theirs, theirVersion } = state.save;

@@ -24,9 +24,7 @@ export function SaveProblem({ save, dispatch }: { save: SaveState; dispatch: (ac
   if (save.kind === "stale")
     return (
       <div role="alert" className="border border-arc-red bg-wash-red p-4 text-ink">
-        <p className="font-bold">
-          {save.by ?? "Someone"} saved this card meanwhile, as version {save.theirVersion}.
-        </p>
+        <p className="font-bold">This card was saved from elsewhere meanwhile, as version {save.theirVersion}.</p>
         <p className="mt-1">
           Nothing of theirs was overwritten and nothing of yours is lost. Load their card (undo brings yours back), or keep yours and save
           it over theirs.

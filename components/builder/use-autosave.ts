@@ -8,7 +8,7 @@ const QUIET_MS = 500;
 const RETRY_MS = 3000;
 
 type Saved = { version: number };
-type Stale = { currentVersion?: number; content?: CardContent; savedBy?: string };
+type Current = { version: number; content: CardContent };
 
 /** Saves the draft a moment after the last change, one save at a time; a stale one overwrites nothing and is told. */
 export function useAutosave(cardId: string, state: BuilderState, dispatch: Dispatch<BuilderAction>): void {
@@ -25,8 +25,9 @@ export function useAutosave(cardId: string, state: BuilderState, dispatch: Dispa
       busy.current = false;
       if (answer.ok) dispatch({ type: "saved", version: answer.body.version, edits });
       else if (answer.problem.status === 412) {
-        const { currentVersion, content: theirs, savedBy } = answer.problem as Stale;
-        dispatch({ type: "stale", theirs: theirs ?? content, theirVersion: currentVersion ?? version, by: savedBy ?? null });
+        const theirs = await callApi<Current>(`/cards/${cardId}`);
+        if (theirs.ok) dispatch({ type: "stale", theirs: theirs.body.content, theirVersion: theirs.body.version });
+        else dispatch({ type: "save failed", why: theirs.problem.detail });
       } else if (answer.problem.status === 0 || answer.problem.status >= 500) dispatch({ type: "save failed", why: answer.problem.detail });
       else dispatch({ type: "save refused", why: answer.problem.detail, errors: answer.problem.errors });
     }, wait);

@@ -67,7 +67,7 @@ export function CardDecisions({ cardId, letter, version, digest, findings, may }
           title={`Withdraw rev ${letter}`}
           description="Printed copies are then not in force. A briefed sortie that flies it drops to planned."
           path={`/cards/${cardId}/withdraw`}
-          body={{}}
+          body={{ letter }}
           version={version}
           ask="reason"
           doing="Withdrawing"
@@ -91,6 +91,7 @@ type SignProps = {
   doing: string;
   children?: React.ReactNode;
 };
+const SENT_AS: Record<Ask, string> = { password: "password", comment: "text", reason: "why" };
 const LABELS: Record<Ask, string> = { password: "Your password", comment: "What is to be changed", reason: "Why it is withdrawn" };
 
 function SignDialog({ trigger, variant, title, description, path, body, version, ask, doing, children }: SignProps) {
@@ -104,7 +105,7 @@ function SignDialog({ trigger, variant, title, description, path, body, version,
     event.preventDefault();
     setBusy(true);
     setProblem(null);
-    const answer = await callApi(path, { method: "POST", body: { ...body, [ask]: typed }, ifMatch: version });
+    const answer = await callApi(path, { method: "POST", body: { ...body, [SENT_AS[ask]]: typed }, ifMatch: version });
     setBusy(false);
     if (!answer.ok) return setProblem(answer.problem);
     setOpen(false);
@@ -162,7 +163,7 @@ function Revise({ cardId }: { cardId: string }) {
   const [busy, setBusy] = useState(false);
   async function revise() {
     setBusy(true);
-    const answer = await callApi(`/cards/${cardId}/revise`, { method: "POST", body: {} });
+    const answer = await callApi(`/cards/${cardId}/revise`, { method: "POST", body: {}, idempotencyKey: crypto.randomUUID() });
     setBusy(false);
     if (!answer.ok) return setProblem(answer.problem.detail);
     router.push("?");

@@ -92,7 +92,7 @@ export function CardRecord({ view }: { view: CardRecordView }) {
           facts={findings.length === 0 ? ["Nothing was found that should keep this card from release."] : []}
           readOnly
         />
-        <Discussion cardId={card.id} letter={revision.letter} comments={comments} points={points} selected={selected} may={may.comment} />
+        <Discussion cardId={card.id} comments={comments} points={points} selected={selected} may={may.comment} />
       </aside>
     </div>
   );

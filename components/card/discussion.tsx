@@ -17,10 +17,10 @@ export type Remark = {
   createdAt: string;
 };
 
-type DiscussionProps = { cardId: string; letter: string; comments: Remark[]; points: CardPoint[]; selected: string | null; may: boolean };
+type DiscussionProps = { cardId: string; comments: Remark[]; points: CardPoint[]; selected: string | null; may: boolean };
 
 /** What was said in review, oldest first, about the card or the point that is selected. */
-export function Discussion({ cardId, letter, comments, points, selected, may }: DiscussionProps) {
+export function Discussion({ cardId, comments, points, selected, may }: DiscussionProps) {
   const nameOf = (id: string) => {
     const index = points.findIndex((point) => point.id === id);
     return index < 0 ? "a point since taken off" : `point ${index + 1}, ${points[index]?.title ?? ""}`;
@@ -41,12 +41,12 @@ export function Discussion({ cardId, letter, comments, points, selected, may }: 
           </li>
         ))}
       </ol>
-      {may ? <CommentForm cardId={cardId} letter={letter} point={selected} about={selected ? nameOf(selected) : "the card"} /> : null}
+      {may ? <CommentForm cardId={cardId} point={selected} about={selected ? nameOf(selected) : "the card"} /> : null}
     </section>
   );
 }
 
-function CommentForm({ cardId, letter, point, about }: { cardId: string; letter: string; point: string | null; about: string }) {
+function CommentForm({ cardId, point, about }: { cardId: string; point: string | null; about: string }) {
   const router = useRouter();
   const [text, setText] = useState("");
   const [problem, setProblem] = useState<string | null>(null);
@@ -57,7 +57,7 @@ function CommentForm({ cardId, letter, point, about }: { cardId: string; letter:
     setBusy(true);
     const answer = await callApi(`/cards/${cardId}/comments`, {
       method: "POST",
-      body: { letter, pointId: point, text },
+      body: { pointId: point, text },
       idempotencyKey: crypto.randomUUID(),
     });
     setBusy(false);

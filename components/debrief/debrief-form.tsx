@@ -57,8 +57,7 @@ export function DebriefForm({ pack, first, store }: { pack: DebriefPack; first: 
     setProblem(null);
     const answer = await callApi(`/sorties/${pack.sortie.id}/debrief/submit`, {
       method: "POST",
-      body: { id: draft.id, debrief: draft.debrief },
-      idempotencyKey: draft.id,
+      body: { id: draft.id, content: draft.debrief },
     });
     setSending(false);
     if (answer.ok) return markSent(new Date().toISOString());

@@ -135,7 +135,7 @@ describe("the builder's reducer", () => {
 
   test("keeps my card within one undo when theirs is taken after a stale save", () => {
     const mine = build(start, { type: "change card", patch: { title: "Mine" }, what: "title" });
-    const stale = build(mine, { type: "stale", theirs: card(point("z")), theirVersion: 9, by: "Engineer" });
+    const stale = build(mine, { type: "stale", theirs: card(point("z")), theirVersion: 9 });
     const theirs = build(stale, { type: "take theirs" });
     expect([order(theirs), theirs.version]).toEqual(["z", 9]);
     expect(build(theirs, { type: "undo" }).content.title).toBe("Mine");

@@ -11,6 +11,7 @@ import { countOf } from "@/lib/format/words";
 import { CARD_STATES } from "@/lib/testcards/words";
 import { listCards } from "@/lib/workflow/card/queries";
 import { may } from "@/lib/workflow/permissions";
+import { BinderPage } from "../binder-page";
 
 export const metadata = { title: "Cards" };
 
@@ -30,7 +31,7 @@ export default async function CardsPage({ params, searchParams }: Props) {
     </Link>
   ) : null;
   return (
-    <>
+    <BinderPage>
       <PageHeader title="Cards" lead="Test points put together for one sitting, reviewed and released as one sheet." actions={newCard} />
       <nav aria-label="State" className="mb-4 flex flex-wrap gap-x-4 gap-y-1">
         {[undefined, ...CARD_STATES].map((one) => (
@@ -100,6 +101,6 @@ export default async function CardsPage({ params, searchParams }: Props) {
         </Table>
       )}
       <p className="mt-3 text-ink-soft text-sm">{countOf(cards.length, "card")}</p>
-    </>
+    </BinderPage>
   );
 }

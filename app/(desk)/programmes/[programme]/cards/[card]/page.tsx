@@ -43,8 +43,8 @@ export default async function CardPage({ params, searchParams }: Props) {
   const { document, revision } = view;
   const { widths: _widths, ...context } = view.context;
   return (
-    <>
-      <header className="flex flex-wrap items-center gap-x-4 gap-y-2 pb-4">
+    <main className="grow bg-paper">
+      <header className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-4">
         <h1 className="font-bold text-xl">
           Card {view.card.number} <span className="ms-2">{document.content.title}</span>
         </h1>
@@ -79,6 +79,6 @@ export default async function CardPage({ params, searchParams }: Props) {
       ) : (
         <CardRecord key={revision.id} view={toRecord(view)} />
       )}
-    </>
+    </main>
   );
 }

@@ -1,6 +1,6 @@
 import { type Calibration, correctReading } from "./calibration";
 import type { CalibrationRecord, CardDocument, ProgrammeSnapshot } from "./card";
-import { cardFacts, instrumentsUsed } from "./readiness/facts";
+import { cardFacts } from "./readiness/facts";
 import type { CardFacts } from "./readiness/rule";
 
 /** One thing that a released card rests on. `digest` is its canonical text: compared, never signed. */
@@ -76,7 +76,7 @@ export function restsOn(card: CardDocument): RestsOn[] {
     calibration: null,
   });
   return [
-    ...instrumentsUsed(facts).flatMap(({ instrument }): RestsOn[] =>
+    ...facts.used.flatMap(({ instrument }): RestsOn[] =>
       instrument
         ? [
             {

@@ -23,12 +23,19 @@ const AS_WRITTEN = 0.1 + ON_THE_MARK;
 
 type Dial = { instrument: Instrument; parameter: Parameter; line: NumberLine; at: PointFacts };
 
+/** Six rules ask for the same lines of the same point. */
+const dialsOf = new WeakMap<PointFacts, Dial[]>();
+
 function dialsAt(facts: CardFacts, at: PointFacts): Dial[] {
-  return at.lines.filter(isNumber).flatMap((line) => {
+  const known = dialsOf.get(at);
+  if (known) return known;
+  const dials = at.lines.filter(isNumber).flatMap((line) => {
     const instrument = facts.instruments.get(line.instrument);
     const parameter = facts.parameters.get(line.parameter);
     return instrument && parameter ? [{ instrument, parameter, line, at }] : [];
   });
+  dialsOf.set(at, dials);
+  return dials;
 }
 
 const isOwn = ({ line, at }: Dial): boolean => at.point.aborts.lines.some((own) => own.id === line.id);
@@ -38,14 +45,14 @@ const past = (value: number, limit: number, side: NumberLine["side"]): boolean =
 
 /** One problem per point for its own lines, one for the whole card for a standing line that is wrong wherever it stands. */
 function perLine(facts: CardFacts, check: (dial: Dial) => string | null, sameEverywhere: (dial: Dial) => boolean = () => true): Problem[] {
-  const said = new Set<string>();
+  const seen = new Set<string>();
   return facts.points.flatMap((at) =>
     dialsAt(facts, at).flatMap((dial): Problem[] => {
       const standing = !isOwn(dial) && sameEverywhere(dial);
-      if (standing && (at.point.engine === "stopped" || said.has(dial.line.id))) return [];
+      if (standing && (at.point.engine === "stopped" || seen.has(dial.line.id))) return [];
+      if (standing) seen.add(dial.line.id);
       const message = whereItFits(() => check(dial));
       if (message === null) return [];
-      if (standing) said.add(dial.line.id);
       const who = standing ? "Standing abort" : at.name;
       return [
         {
@@ -57,8 +64,8 @@ function perLine(facts: CardFacts, check: (dial: Dial) => string | null, sameEve
   );
 }
 
-const usesStandardRate = ({ at, parameter, line, instrument }: Dial): boolean =>
-  whereItFits(() => !approachRate(at.point, parameter, line.side, instrument.unit).own) ?? true;
+const usesStandardRate = ({ at, line }: Dial): boolean =>
+  at.point.limits.length === 0 && !at.point.readings.some((r) => r.parameter === line.parameter && r.expectedRatePerMin !== null);
 
 function callAt(facts: CardFacts, dial: Dial): string {
   const { line, instrument, at } = dial;
@@ -115,7 +122,7 @@ function abortPastLimit(facts: CardFacts): Problem[] {
     const limits = guardedLimits(facts.card, at.point, line.parameter, line.side, line.appliesWhen);
     return limits.map((limit) => overLimit(facts, dial, limit)).find((message) => message !== null) ?? null;
   };
-  return perLine(facts, check, (dial) => usesStandardRate(dial) && dial.at.point.limits.length === 0);
+  return perLine(facts, check, usesStandardRate);
 }
 
 /** The number that prints as a gauge number is on the wrong side of the true value it is meant to stand for. */

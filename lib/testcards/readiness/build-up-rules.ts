@@ -123,11 +123,11 @@ function predicted(facts: CardFacts, at: PointFacts, line: NumberLine): number |
 function predictionPastAbort(facts: CardFacts): Problem[] {
   return facts.points.flatMap((at) =>
     at.lines.filter(isNumber).flatMap((line): Problem[] => {
-      const threshold = line.side === "max" && at.point.engine === "running" ? thresholdOf(facts, line) : null;
-      if (!threshold) return [];
+      if (line.side !== "max" || at.point.engine === "stopped") return [];
       const fit = predicted(facts, at, line);
       const value = fit ?? expectedHigh(facts, at, line);
-      if (value === null || value <= threshold.value + 1e-6) return [];
+      const threshold = value === null ? null : thresholdOf(facts, line);
+      if (value === null || !threshold || value <= threshold.value + 1e-6) return [];
       const what = fit === null ? "the expected band tops at" : "predicted";
       const message = `${at.name}: ${threshold.name} ${what} ${withUnit(apart(value, threshold.value), threshold.unit)}, past the abort threshold ${withUnit(figure(threshold.value, 1), threshold.unit)}. Do not release it; take a smaller step.`;
       return [{ message, where: atPoint(at, "series", line.id) }];

@@ -1,4 +1,3 @@
-import { positionsTaken } from "./facts";
 import { atPoint, type CardFacts, type Problem, type Rule } from "./rule";
 import { list } from "./say";
 
@@ -27,7 +26,7 @@ function recoveryWithoutOpening(facts: CardFacts): Problem[] {
   return facts.points.flatMap((at) => {
     const powered = at.point.conditions.includes("at power") || at.point.conditions.includes("full power");
     if (!powered || at.point.engine === "stopped") return [];
-    return positionsTaken(facts, at.point).flatMap(({ control, position }): Problem[] => {
+    return at.taken.flatMap(({ control, position }): Problem[] => {
       const first = `${control.name} ${control.recoverTo}`;
       if (!position.restricted || at.point.recovery.trim().toUpperCase().startsWith(first.toUpperCase())) return [];
       return [

@@ -1,9 +1,15 @@
-import { abortsOf, type CardDocument, type CardPoint, type Instrument } from "../card";
+import { abortsOf, type CardDocument, type CardPoint, type Control } from "../card";
 import type { FindingPlace } from "../readiness-types";
-import { atPoint, type CardFacts, isNumber, type PointFacts, type SheetFacts } from "./rule";
+import { atPoint, type CardFacts, type InstrumentUse, isNumber, type PointFacts, type SheetFacts } from "./rule";
+import { statedSpeeds } from "./speeds";
 
 export function cardFacts(card: CardDocument, context: CardFacts["context"], on: string, sheet: SheetFacts): CardFacts {
   const { programme, content } = card;
+  const instruments = new Map(programme.instruments.map((instrument) => [instrument.id, instrument]));
+  const points = content.points.map((point, i): PointFacts => {
+    const taken = positionsTaken(programme.controls, point);
+    return { point, name: `Point ${i + 1}`, lines: abortsOf(programme, point), speeds: statedSpeeds(point), taken };
+  });
   return {
     card,
     content,
@@ -11,18 +17,17 @@ export function cardFacts(card: CardDocument, context: CardFacts["context"], on:
     context,
     on,
     name: `Card ${card.identity.number}`,
-    points: content.points.map((point, i) => ({ point, name: `Point ${i + 1}`, lines: abortsOf(programme, point) })),
+    points,
     parameters: new Map(programme.parameters.map((parameter) => [parameter.code, parameter])),
-    instruments: new Map(programme.instruments.map((instrument) => [instrument.id, instrument])),
+    instruments,
+    used: instrumentsUsed(points, instruments),
     sheet,
   };
 }
 
-export type InstrumentUse = { id: string; instrument: Instrument | undefined; use: string; where: FindingPlace };
-
-function usesAt(facts: CardFacts, at: PointFacts): InstrumentUse[] {
+function usesAt(instruments: CardFacts["instruments"], at: PointFacts): InstrumentUse[] {
   const { point, name, lines } = at;
-  const used = (id: string, use: string, where: FindingPlace): InstrumentUse => ({ id, instrument: facts.instruments.get(id), use, where });
+  const used = (id: string, use: string, where: FindingPlace): InstrumentUse => ({ id, instrument: instruments.get(id), use, where });
   const judged = point.readings.filter((r) => r.kind === "number" || r.kind === "count");
   return [
     ...judged.flatMap((r) => (r.instrument ? [used(r.instrument, `${name}, ${r.label}`, atPoint(at, "readings", r.id))] : [])),
@@ -32,9 +37,9 @@ function usesAt(facts: CardFacts, at: PointFacts): InstrumentUse[] {
 }
 
 /** Every instrument that a reading, an abort number or an entry condition of this card is read on, each once. */
-export function instrumentsUsed(facts: CardFacts): InstrumentUse[] {
+function instrumentsUsed(points: readonly PointFacts[], instruments: CardFacts["instruments"]): InstrumentUse[] {
   const seen = new Map<string, InstrumentUse>();
-  for (const use of facts.points.flatMap((at) => usesAt(facts, at))) if (!seen.has(use.id)) seen.set(use.id, use);
+  for (const at of points) for (const use of usesAt(instruments, at)) if (!seen.has(use.id)) seen.set(use.id, use);
   return [...seen.values()];
 }
 
@@ -55,27 +60,28 @@ export function pilotLines(point: CardPoint): PilotLine[] {
 
 export const stepLetter = (index: number): string => String.fromCharCode(97 + index);
 
+const asWords = (text: string): string => ` ${text.toUpperCase().replace(/[^\p{L}\p{N}]+/gu, " ")} `;
+
 /** A control's position that the entry line states or a step sets. */
-export function positionsTaken(facts: CardFacts, point: CardPoint) {
-  return facts.programme.controls.flatMap((control) =>
+function positionsTaken(controls: readonly Control[], point: CardPoint): PointFacts["taken"] {
+  const steps = point.steps.map((step) => asWords(step.text));
+  return controls.flatMap((control) =>
     control.positions
-      .filter(
-        (position) =>
-          point.positions.some((p) => p.control === control.name && p.position === position.name) ||
-          point.steps.some((step) => saysPosition(step.text, control.name, position.name)),
-      )
+      .filter((position) => {
+        const words = asWords(`${control.name} ${position.name}`);
+        const stated = point.positions.some((p) => p.control === control.name && p.position === position.name);
+        return stated || steps.some((step) => step.includes(words));
+      })
       .map((position) => ({ control, position })),
   );
 }
 
 /** "COWL SHUT" inside a longer line, whatever the case. */
-export function saysPosition(text: string, control: string, position: string): boolean {
-  return ` ${text.toUpperCase().replace(/[^\p{L}\p{N}]+/gu, " ")} `.includes(` ${control.toUpperCase()} ${position.toUpperCase()} `);
-}
+export const saysPosition = (text: string, control: string, position: string): boolean =>
+  asWords(text).includes(asWords(`${control} ${position}`));
 
 /** A restricted position (one that needs height, crew and a way back) taken in the air. */
-export function restrictedInAir(facts: CardFacts, point: CardPoint): string | null {
-  if (point.place !== "air") return null;
-  const taken = positionsTaken(facts, point).find(({ position }) => position.restricted);
-  return taken ? `${taken.control.name} ${taken.position.name}` : null;
+export function restrictedInAir({ point, taken }: PointFacts): string | null {
+  const found = point.place === "air" ? taken.find(({ position }) => position.restricted) : undefined;
+  return found ? `${found.control.name} ${found.position.name}` : null;
 }

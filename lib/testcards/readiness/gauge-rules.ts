@@ -1,5 +1,4 @@
 import type { EntryCondition, Instrument } from "../card";
-import { instrumentsUsed } from "./facts";
 import { atPoint, type CardFacts, type PointFacts, type Problem, type Rule } from "./rule";
 import { onGaugeFigure, sentence, withUnit } from "./say";
 
@@ -14,7 +13,7 @@ function whyNotCalibrated(instrument: Instrument, on: string): string | null {
 }
 
 function notCalibrated(facts: CardFacts): Problem[] {
-  return instrumentsUsed(facts).flatMap(({ instrument, use, where }): Problem[] => {
+  return facts.used.flatMap(({ instrument, use, where }): Problem[] => {
     if (!instrument)
       return [{ message: `${use}: its instrument is not in the programme. Choose one that is fitted and calibrated.`, where }];
     const why = whyNotCalibrated(instrument, facts.on);
@@ -29,7 +28,7 @@ function notCalibrated(facts: CardFacts): Problem[] {
 }
 
 function sensorMoved(facts: CardFacts): Problem[] {
-  return instrumentsUsed(facts).flatMap(({ instrument }): Problem[] => {
+  return facts.used.flatMap(({ instrument }): Problem[] => {
     const c = instrument?.calibration;
     if (!instrument || !c?.disturbedOn || c.disturbedOn < c.calibratedOn) return [];
     const message = `${instrument.name}'s sensor was moved, re-wired or replaced on ${c.disturbedOn}, since its calibration of ${c.calibratedOn}. Recalibrate it in place.`;

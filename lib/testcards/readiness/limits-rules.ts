@@ -119,7 +119,7 @@ function readingUnits(facts: CardFacts): Problem[] {
 }
 
 function normalReachesAbort(facts: CardFacts): Problem[] {
-  const said = new Set<string>();
+  const seen = new Set<string>();
   return facts.points.flatMap((at) =>
     at.lines.filter(isNumber).flatMap((line): Problem[] => {
       const instrument = facts.instruments.get(line.instrument);
@@ -127,13 +127,14 @@ function normalReachesAbort(facts: CardFacts): Problem[] {
       const normal = parameter?.normal;
       const calibration = instrument?.calibration;
       if (!instrument || !parameter || !calibration || normal?.high == null || line.side !== "max" || line.perMinute) return [];
+      const key = `${line.id} ${line.instrument}`;
+      if (seen.has(key)) return [];
+      seen.add(key);
       const high = normal.high;
       const top = whereItFits(() =>
         gaugeLimit({ limit: convert(high, normal.unit, instrument.unit), side: "max", calibration, readable: instrument.readable }),
       );
-      const key = `${line.id} ${line.instrument}`;
-      if (!top || top.printed < line.onGauge - ON_THE_MARK || said.has(key)) return [];
-      said.add(key);
+      if (!top || top.printed < line.onGauge - ON_THE_MARK) return [];
       const shown = (value: number) => withUnit(onGaugeFigure(value, instrument.readable), instrument.unit);
       const message = `${at.name}: the normal range of ${midSentence(parameter.shortName)} tops at ${shown(top.printed)} on the gauge, at or past the abort number ${shown(line.onGauge)}. Narrow it.`;
       return [{ message, where: atPoint(at, "aborts", line.id) }];

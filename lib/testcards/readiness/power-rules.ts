@@ -54,8 +54,9 @@ function longestHold(point: CardPoint, beyond: (step: Step) => boolean): { heldS
 }
 
 function heldTooLong(facts: CardFacts): Problem[] {
-  const check = (at: PointFacts, { quantity, of }: Powered): Problem[] => {
-    const problems = ceilings(facts, quantity).flatMap((ceiling): Problem[] => {
+  const powered = POWERED.map((one) => ({ ...one, most: ceilings(facts, one.quantity) }));
+  const check = (at: PointFacts, { quantity, of, most }: Powered & { most: Limit[] }): Problem[] => {
+    const problems = most.flatMap((ceiling): Problem[] => {
       const beyond = (step: Step) => (of(step) ?? 0) > ceiling.value + EPSILON;
       const { heldS, step, index } = longestHold(at.point, beyond);
       if (!step || (heldS <= ceiling.forS + EPSILON && heldS > 0)) return [];
@@ -70,7 +71,7 @@ function heldTooLong(facts: CardFacts): Problem[] {
     });
     return problems.slice(0, 1);
   };
-  return facts.points.flatMap((at) => (at.point.engine === "stopped" ? [] : POWERED.flatMap((powered) => check(at, powered))));
+  return facts.points.flatMap((at) => (at.point.engine === "stopped" ? [] : powered.flatMap((one) => check(at, one))));
 }
 
 const HEIGHT = /(\d{1,3}(?:[\s,]\d{3})+|\d+)\s*ft\b/g;

@@ -1,4 +1,4 @@
-import type { AbortLine, CardContent, CardDocument, CardPoint, Instrument, Parameter, ProgrammeSnapshot } from "../card";
+import type { AbortLine, CardContent, CardDocument, CardPoint, Control, Instrument, Parameter, ProgrammeSnapshot } from "../card";
 import type { Finding, FindingPlace, SortieContext, SortiePlan } from "../readiness-types";
 import type { SheetOverflow, SheetPage } from "../sheet-types";
 
@@ -14,7 +14,12 @@ export type PointFacts = {
   point: CardPoint;
   name: string; // "Point 2", the number in its circle
   lines: AbortLine[]; // in force here: standing ones and its own
+  speeds: StatedSpeed[];
+  taken: { control: Control; position: Control["positions"][number] }[]; // stated in the entry line or set by a step
 };
+
+export type InstrumentUse = { id: string; instrument: Instrument | undefined; use: string; where: FindingPlace };
+export type StatedSpeed = { kt: number; said: string; field: "entry" | "steps"; item?: string };
 
 /** A card looked up once, so that no rule searches a list again. */
 export type CardFacts = {
@@ -27,6 +32,7 @@ export type CardFacts = {
   points: PointFacts[];
   parameters: Map<string, Parameter>;
   instruments: Map<string, Instrument>;
+  used: InstrumentUse[]; // each instrument of the card once
   sheet: SheetFacts;
 };
 

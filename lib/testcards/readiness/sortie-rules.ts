@@ -110,7 +110,7 @@ function crewAboveMinimum({ sortie, cards }: SortieFacts): Problem[] {
   const reasons = cards.flatMap((facts) => [
     ...(firstFlight(facts) ? ["a first flight of a change"] : []),
     ...facts.points.flatMap((at) => {
-      const restricted = restrictedInAir(facts, at.point);
+      const restricted = restrictedInAir(at);
       if (restricted) return [`${restricted} in the air at ${facts.name} ${at.name.toLowerCase()}`];
       return at.point.minimumCrewOnly && at.point.place === "air" ? [`${facts.name} ${at.name.toLowerCase()}`] : [];
     }),

@@ -1,8 +1,7 @@
 import type { Aircraft } from "../card";
 import { restrictedInAir, saysPosition } from "./facts";
-import { atPoint, type CardFacts, type PointFacts, type Problem, type Rule } from "./rule";
+import { atPoint, type CardFacts, type PointFacts, type Problem, type Rule, type StatedSpeed } from "./rule";
 import { amount } from "./say";
-import { type StatedSpeed, statedSpeeds } from "./speeds";
 
 const EPSILON = 1e-9;
 
@@ -11,9 +10,9 @@ function speedOf(aircraft: Aircraft, symbol: string): number | null {
   return aircraft.speeds.find((speed) => speed.code.replace(/[^a-z0-9]/gi, "").toUpperCase() === symbol)?.valueKt ?? null;
 }
 
-function fastestBeyond(point: PointFacts["point"], limitKt: number | null): StatedSpeed | null {
+function fastestBeyond({ speeds }: PointFacts, limitKt: number | null): StatedSpeed | null {
   if (limitKt === null) return null;
-  const beyond = statedSpeeds(point).filter((speed) => speed.kt > limitKt + EPSILON);
+  const beyond = speeds.filter((speed) => speed.kt > limitKt + EPSILON);
   return beyond.reduce<StatedSpeed | null>((most, speed) => (most && most.kt >= speed.kt ? most : speed), null);
 }
 
@@ -25,7 +24,7 @@ function pastLimit(facts: CardFacts): Problem[] {
     const { point, name } = at;
     const flap = point.wingFlap && flapExtended !== null && (neverExceed === null || flapExtended < neverExceed);
     const limit = flap ? flapExtended : neverExceed;
-    const beyond = fastestBeyond(point, limit);
+    const beyond = fastestBeyond(at, limit);
     if (beyond && limit !== null)
       return [
         {
@@ -48,7 +47,7 @@ function pastLimit(facts: CardFacts): Problem[] {
 function smoothAirMissing(facts: CardFacts): Problem[] {
   const normalOperating = speedOf(facts.programme.aircraft, "VNO");
   return facts.points.flatMap((at): Problem[] => {
-    const beyond = at.point.smoothAir ? null : fastestBeyond(at.point, normalOperating);
+    const beyond = at.point.smoothAir ? null : fastestBeyond(at, normalOperating);
     if (!beyond || normalOperating === null) return [];
     return [
       {
@@ -62,7 +61,7 @@ function smoothAirMissing(facts: CardFacts): Problem[] {
 function heightFloorMissing(facts: CardFacts): Problem[] {
   return facts.points.flatMap((at): Problem[] => {
     if (at.point.heightFloor !== null) return [];
-    const restricted = restrictedInAir(facts, at.point);
+    const restricted = restrictedInAir(at);
     if (!restricted && !at.point.needsHeightFloor) return [];
     const why = restricted ? `takes ${restricted} in the air` : "is a stall, an engine cut or a point of its kind";
     return [{ message: `${at.name} ${why} and has no minimum height. Add it.`, where: atPoint(at, "heightFloor") }];
@@ -79,7 +78,7 @@ function positionOverspeed(facts: CardFacts): Problem[] {
         const stated = at.point.positions.some((p) => p.control === control.name && p.position === position.name);
         const inStep = (speed: StatedSpeed) =>
           at.point.steps.some((s) => s.id === speed.item && saysPosition(s.text, control.name, position.name));
-        const beyond = statedSpeeds(at.point).find((speed) => speed.kt > most + EPSILON && (stated || inStep(speed)));
+        const beyond = at.speeds.find((speed) => speed.kt > most + EPSILON && (stated || inStep(speed)));
         if (!beyond) return [];
         const others = control.positions.filter(
           (p) => !p.groundOnly && !p.restricted && (p.maxSpeedKt === null || p.maxSpeedKt >= beyond.kt),

@@ -1,8 +1,6 @@
 import type { CardPoint } from "../card";
 import { convert, sameDimension, type Unit } from "../units";
-import { whereItFits } from "./rule";
-
-export type StatedSpeed = { kt: number; said: string; field: "entry" | "steps"; item?: string };
+import { type StatedSpeed, whereItFits } from "./rule";
 
 const AIRSPEED_UNITS: readonly Unit[] = ["kt", "km/h", "mph", "m/s"];
 const IN_TEXT = /((?:\d+(?:\.\d+)?\s*\/\s*)*\d+(?:\.\d+)?)\s*(?:±\s*(\d+(?:\.\d+)?)\s*)?(?:kt|KIAS|KCAS)\b(?:\s*±\s*(\d+(?:\.\d+)?))?/g;

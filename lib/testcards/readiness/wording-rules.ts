@@ -1,5 +1,5 @@
 import { trueValueOnGaugeLine } from "./abort-rules";
-import { instrumentsUsed, type PilotLine, pilotLines, stepLetter } from "./facts";
+import { type PilotLine, pilotLines, stepLetter } from "./facts";
 import { atPoint, type CardFacts, type Problem, type Rule } from "./rule";
 
 const LONGEST_STEP = 60;
@@ -37,7 +37,7 @@ const escaped = (text: string): string => text.replace(/[.*+?^${}()|[\]\\]/g, "\
 
 /** "coolant 85" without "on the gauge": the name of a safety parameter that the pilot reads, then a number that is no time. */
 function unsaidGauge(facts: CardFacts): RegExp | null {
-  const names = instrumentsUsed(facts).flatMap(({ instrument }) => {
+  const names = facts.used.flatMap(({ instrument }) => {
     const parameter = instrument && facts.parameters.get(instrument.parameter);
     return instrument && parameter?.safety && instrument.visibleTo.includes("pilot")
       ? [parameter.shortName, parameter.name, instrument.gaugeName]

@@ -18,6 +18,7 @@ const RANGES = {
   made: 16, // what the use cases mint, in order
   "card point": 17,
   debrief: 18,
+  signature: 19,
 } as const;
 
 export type SeedSubject = keyof typeof RANGES;

@@ -1,21 +1,6 @@
 import type { CardPoint, Reading } from "@/lib/testcards/card";
-import {
-  abortAt,
-  abortIf,
-  byHeight,
-  counting,
-  type Expected,
-  entry,
-  freely,
-  note,
-  oilBeforeFullPower,
-  power,
-  powerReadings,
-  read,
-  six,
-  testPoint,
-  tit,
-} from "./build";
+import { abortAt, abortIf, byHeight, counting, freely, power, testPoint } from "./build";
+import { type Expected, entry, note, oilBeforeFullPower, powerReadings, read, six, tit } from "./readings";
 
 const RECOVER = "COWL OPEN (below 105 kt), level, 45 %, 80 kt";
 

@@ -1,5 +1,6 @@
 import type { CardPoint } from "@/lib/testcards/card";
-import { abortAt, abortIf, byTime, counting, entry, note, ownLimit, power, powerReadings, read, six, testPoint, tit } from "./build";
+import { abortAt, abortIf, byTime, counting, ownLimit, power, testPoint } from "./build";
+import { entry, note, powerReadings, read, six, tit } from "./readings";
 
 /** One straight line through the steps of this series predicts the next power. */
 export const COWL_SHUT_SERIES = "COWL SHUT, power held";

@@ -1,19 +1,6 @@
 import type { CardPoint } from "@/lib/testcards/card";
-import {
-  abortIf,
-  byTime,
-  counting,
-  type Expected,
-  entry,
-  freely,
-  note,
-  ownLimit,
-  power,
-  powerReadings,
-  read,
-  testPoint,
-  tit,
-} from "./build";
+import { abortIf, byTime, counting, freely, ownLimit, power, testPoint } from "./build";
+import { type Expected, entry, note, powerReadings, read, tit } from "./readings";
 
 const onRecorder = ({ coolant, cht, oil, iat }: Expected) => [
   read("coolant", { expected: coolant }),

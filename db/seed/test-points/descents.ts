@@ -1,5 +1,6 @@
 import type { CardPoint } from "@/lib/testcards/card";
-import { abortAt, abortIf, byTime, counting, entry, note, ownLimit, power, read, testPoint, tit } from "./build";
+import { abortAt, abortIf, byTime, counting, ownLimit, power, testPoint } from "./build";
+import { entry, note, read, tit } from "./readings";
 
 const T15 = testPoint("T15", {
   title: "Descent at idle",
@@ -38,9 +39,9 @@ const T16 = testPoint("T16", {
   purpose: "Pick-up and boost control after cooling. First at 3000 ft; then 1000 AGL over the runway, its own card.",
   place: "air",
   cowl: "TRAIL",
-  entryText: "3000 ft ±100; oil T 55 °C, coolant 62.5 °C on the gauge or more",
+  entryText: "3000 ft ±100; oil T 55, coolant 62.5 °C on the gauge or more",
   entry: [entry("altitude", "about", 3000, 100), entry("oilT", "at least", 55), entry("coolant", "at least", 62.5)],
-  steps: [power("Open over 2 s to 2700/30.0", 2700, 30, 120), "68 kt ±3", "COWL OPEN", "Climb 2 min"],
+  steps: [power("Open over 2 s to 2700/30.0, 68 kt ±3", 2700, 30, 120), "COWL OPEN, climb 2 min"],
   readings: [
     read("time", { id: "pick-up", label: "Pick-up, s", head: "s", sampling: "single", sheet: "single" }),
     read("rpm", { id: "rpm-full", label: "RPM at full power, highest", sheet: "single", when: ["full power"] }),
@@ -73,9 +74,9 @@ const T16 = testPoint("T16", {
   aborts: [
     abortAt("oil-t", "OIL-T", 54, 55, { side: "min", when: "full power" }),
     abortAt("oil-p", "OIL-P", 69, 67.5),
-    ...abortIf("oil T low: do not open up, land", "hesitation"),
+    ...abortIf("hesitation"),
   ],
-  recovery: "COWL OPEN, glide 65 kt, land",
+  recovery: "COWL OPEN, glide 65 kt, land; oil T low: do not open up, land",
   completion: "none",
   min: 5,
   flow: 30,

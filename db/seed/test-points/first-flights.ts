@@ -1,5 +1,6 @@
 import type { CardPoint } from "@/lib/testcards/card";
-import { abortIf, byTime, counting, entry, freely, power, powerReadings, read, six, testPoint, tit } from "./build";
+import { abortIf, byTime, counting, freely, power, testPoint } from "./build";
+import { entry, powerReadings, read, six, tit } from "./readings";
 
 const T08 = testPoint("T08", {
   title: "First take-off and climb",

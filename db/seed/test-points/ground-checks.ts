@@ -1,22 +1,6 @@
 import type { CardPoint } from "@/lib/testcards/card";
-import {
-  abortAt,
-  abortIf,
-  byTime,
-  coolDown,
-  counting,
-  entry,
-  freely,
-  note,
-  oilBeforeFullPower,
-  ownLimit,
-  power,
-  read,
-  six,
-  testPoint,
-  tit,
-  within,
-} from "./build";
+import { abortAt, abortIf, byTime, coolDown, counting, freely, ownLimit, power, testPoint, within } from "./build";
+import { entry, note, oilBeforeFullPower, read, six, tit } from "./readings";
 
 const T05 = testPoint("T05", {
   title: "Taxi cooling, downwind",
@@ -180,17 +164,16 @@ const T23 = testPoint("T23", {
 const T26 = testPoint("T26", {
   title: "Hot fuel and vapour",
   purpose:
-    "No vapour lock after a soak. Leg a COWL OPEN at full power; leg b COWL SHUT on its own card, only to a power at which T13 is accepted.",
+    "No vapour lock after a soak, tank fuel as hot as it can be had. Leg a COWL OPEN at full power; leg b COWL SHUT on its own card, only to a power at which T13 is accepted.",
   place: "ground",
   cowl: "OPEN",
-  entryText: "after T03; hottest tank fuel, line 40-48 °C on the logger, people clear",
+  entryText: "after T03; line 40-48 °C on the logger, people clear",
   entry: [entry("line", "about", 44, 4)],
   steps: [
     power("Idle 5 min, 1000 rpm", 1000, null, 300),
-    power("45 %, 2200/20.0, 1 min", 2200, 20, 60),
-    power("Full power 2700/30.0, 1 min", 2700, 30, 60),
-    "Taxi 5 min",
-    "Auxiliary fuel pump off, then on",
+    power("2200/20.0, 1 min", 2200, 20, 60),
+    power("2700/30.0, 1 min", 2700, 30, 60),
+    "Taxi 5 min, auxiliary fuel pump off, then on",
     coolDown("1000 rpm 3 min, cool-down"),
   ],
   readings: [
@@ -213,7 +196,7 @@ const T26 = testPoint("T26", {
     read("oat", { sampling: "single", sheet: "single" }),
     note("roughness", "Roughness, 0 smooth to 3 rough", "choice", { choices: ["0", "1", "2", "3"] }),
   ],
-  conditions: ["idle", "at power", "full power"],
+  conditions: ["at power", "full power"],
   aborts: [
     abortAt("coolant", "COOLANT-REPEATER", 104.5, 104.5),
     abortAt("fuel-p", "FUEL-P", 2.7, 2.7, { side: "min" }),

@@ -1,22 +1,7 @@
 import type { CardPoint, Reading } from "@/lib/testcards/card";
-import {
-  abortAt,
-  abortIf,
-  byTime,
-  coolDown,
-  counting,
-  engineStop,
-  note,
-  oilBeforeFullPower,
-  ownLimit,
-  power,
-  powerReadings,
-  read,
-  six,
-  testPoint,
-  tit,
-} from "./build";
+import { abortAt, abortIf, byTime, coolDown, counting, engineStop, ownLimit, power, testPoint } from "./build";
 import { gapError, gapErrorLimit } from "./inspections";
+import { note, oilBeforeFullPower, powerReadings, read, six, tit } from "./readings";
 
 const catchTank = ownLimit("catch-tank", "max", 150, "mL", 10, "Catch tank");
 
@@ -25,15 +10,15 @@ const T18 = testPoint("T18", {
   purpose: "Tight and plumbed right, before anything is asked of it.",
   place: "ground",
   cowl: "REMOVED",
-  entryText: "torque list signed, tied down, extinguisher manned",
+  entryText: "torque list signed, extinguisher manned",
   steps: [
     power("1200 rpm 5 min", 1200, null, 300),
     coolDown(),
     engineStop("Stop, look for leaks"),
     power("1800 rpm 5 min", 1800, null, 300),
     coolDown("1000 rpm 3 min, cool-down again"),
-    engineStop("Stop, look; pressure-check the intercooler joints"),
-    "Cowl on, COWL lever through all detents, measure the gaps",
+    engineStop("Stop, look; pressure-check the joints"),
+    "COWL lever through the detents, measure gaps",
   ],
   readings: [
     read("time", { id: "oil-p-time", label: "Seconds to oil P 20 psi on the gauge", head: "OIL s", sampling: "single", sheet: "single" }),
@@ -60,7 +45,7 @@ const T18 = testPoint("T18", {
     ownLimit("force", "max", 60, "N", 5, "Lever force"),
   ],
   aborts: abortIf("any leak", "no oil P at 10 s"),
-  recovery: "Stop, fuel off, all stand clear, cap stays closed",
+  recovery: "Stop, fuel off, stand clear, cap closed",
   completion: "none",
   min: 30,
   flow: 8,

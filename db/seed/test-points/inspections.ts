@@ -1,5 +1,6 @@
 import type { CardPoint } from "@/lib/testcards/card";
-import { abortIf, note, ownLimit, read, testPoint } from "./build";
+import { abortIf, ownLimit, testPoint } from "./build";
+import { note, read } from "./readings";
 
 /** The worst of the three detents, so that one line on the sheet stands for all. */
 export const gapError = note("gap-error", "Gap furthest off 12 / 45 / 110 mm, by", "number", {

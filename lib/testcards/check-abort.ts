@@ -1,6 +1,6 @@
 /** Comparison (i): the gauge against the number to abort at. It says whether a call was due; a call is never questioned. */
 import { type AbortLine, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf, type Reading } from "./card";
-import { converted, extremeOf, rawRows, speaksFor } from "./check-gauge";
+import { converted, extremeOf, isUsable, rawRows, speaksFor } from "./check-gauge";
 import { clock } from "./check-limits";
 import type { AbortCall, CheckLine, Debrief, DisciplineLine, PointDebrief, ReadingEntry } from "./debrief-types";
 import { abortDiscipline, largestFall } from "./verdict";
@@ -23,7 +23,7 @@ export function abortReport(
       const value = watches(reading, line) ? worstRead(card, line, reading, entryOf(said, reading)) : null;
       return value === null ? [] : [{ reading, value }];
     });
-    const told = named.flatMap(({ onGauge }) => (onGauge !== null && Number.isFinite(onGauge) && !line.perMinute ? [onGauge] : []));
+    const told = named.flatMap(({ onGauge }) => (onGauge !== null && isUsable(onGauge) && !line.perMinute ? [onGauge] : []));
     const worstOnGauge = worstOf(line, [...read.map(({ value }) => value), ...told]);
     return { line, named: named.length > 0, read, worstOnGauge, reached: worstOnGauge !== null && isReached(line, worstOnGauge) };
   });
@@ -68,7 +68,7 @@ function worstRead(card: CardDocument, line: NumberLine, reading: Reading, entry
 
 /** Largest fall on the gauge over the window, raw; null where the rows are too few or too far apart to show it. */
 function fallOnGauge(entry: ReadingEntry, windowS: number): number | null {
-  const series = rawRows(entry).flatMap(({ atS, value }) => (atS === null || !Number.isFinite(atS) ? [] : [{ timeS: atS, value }]));
+  const series = rawRows(entry).flatMap(({ atS, value }) => (atS === null || !isUsable(atS) ? [] : [{ timeS: atS, value }]));
   const gaps = series.slice(1).map((sample, i) => sample.timeS - (series[i]?.timeS ?? 0));
   const spanS = gaps.reduce((sum, gap) => sum + gap, 0);
   if (series.length < 2 || windowS <= 0 || spanS < windowS || gaps.some((gap) => gap <= 0 || gap > windowS)) return null;

@@ -109,7 +109,11 @@ function figureFor(subject: Subject, limit: AppliedLimit): Figure | null {
   switch (limit.statistic) {
     case "instant":
     case "sustained":
-      return speaksFor(reading, limit.side) ? levelFigure(subject, limit) : null;
+      if (speaksFor(reading, limit.side)) return levelFigure(subject, limit);
+      // the card's table waits for a reading that can speak; the point's own limit names this one and must not go unsaid
+      return limit.authority === null
+        ? missing(`a ${reading.sampling} says nothing about a ${limit.side === "max" ? "maximum" : "minimum"}`)
+        : null;
     case "rate":
       if (sameDimension(gauge.unit, limit.unit)) return speaksFor(reading, limit.side) ? levelFigure(subject, limit) : null;
       return reading.sampling === "series" ? fallFigure(subject, limit) : null;

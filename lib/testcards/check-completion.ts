@@ -61,7 +61,7 @@ function stabilised(card: CardDocument, point: CardPoint, said: PointDebrief | n
   return { point: worst, of: (reading: Reading) => steady.get(reading.parameter ?? "") ?? worst };
 }
 
-/** [14 CFR 25.1045(a)] less than 2 °F a minute, and the slope itself known to half of that (team's own rule). */
+/** [CFR-25.1045] (a): less than 2 °F a minute, and the slope itself known to half of that (team's own rule). */
 function steadyNow(card: CardDocument, reading: Reading, entry: ReadingEntry | null, context: CheckContext): Completion {
   const name = parameterOf(card, reading.parameter)?.shortName ?? reading.label;
   const not = (why: string): Completion => ({ reason: "not stabilised", why: `${name} ${why}` });
@@ -125,7 +125,7 @@ function past(ranS: number | null, peakS: number | null, askedS: number): Comple
   return { reason: gone >= askedS - ROUNDING_S ? null : "stopped early", why: `ran ${clock(gone)} of ${clock(askedS)} past the highest` };
 }
 
-/** [14 CFR 23.1043(a)(4), before 2017] a turbocharged engine is run through the part of the climb for which the turbocharger is used. */
+/** [CFR-23.1043] (a)(4): a turbocharged engine is run through the part of the climb for which the turbocharger is used. */
 function heightHeld(card: CardDocument, point: CardPoint, said: PointDebrief | null): Completion {
   const critical = card.programme.aircraft.criticalAltitudeFt;
   if (point.place === "ground" || critical === null) return { reason: null, why: "" };

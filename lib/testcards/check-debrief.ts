@@ -21,7 +21,7 @@ export const CORE_VERSION = "1";
  * Judges the debrief on the card's document: each reading against its abort number, as flown against card and placard, and on the hot day
  * against the placard; then completion, abort discipline, squawks and the proposed step decision.
  *
- * Source    [14 CFR 23.1043] and [JCGM 106] behind the modules it calls; the rules that join them are the team's own.
+ * Source    [CFR-23.1043] and [JCGM-106] behind the modules it calls; the rules that join them are the team's own.
  * Inputs    the debrief as typed (raw stays raw: amendments stand beside it in the context). Points of other cards are left alone.
  * Throws    nothing on well-formed input. What is missing gives "no verdict" with its reason, never a pass.
  */

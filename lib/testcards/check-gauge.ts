@@ -76,7 +76,7 @@ function isCalibration(calibration: CalibrationRecord): boolean {
  * `ownU` is a limit's own expanded uncertainty, in `unit`; it stands in place of the gauge's.
  */
 export function correct(read: number, gauge: Gauge, unit: Unit, ownU: number | null = null, isCount = false): Corrected | null {
-  if (!Number.isFinite(read) || !sameDimension(gauge.unit, unit)) return null;
+  if (!isUsable(read) || !sameDimension(gauge.unit, unit)) return null;
   if (gauge.instrument === null) {
     const expandedUncertainty = ownU ?? (isCount ? 0 : null);
     const value = converted(read, gauge.unit, unit);
@@ -95,6 +95,13 @@ export function correct(read: number, gauge: Gauge, unit: Unit, ownU: number | n
     beyond: corrected.beyond,
     reasons: [...gauge.reasons, ...(corrected.beyond === null ? [] : (["outside calibrated range"] as const))],
   };
+}
+
+/** No gauge shows more; a figure past this counts as none. */
+const LARGEST = 1e9;
+
+export function isUsable(value: number): boolean {
+  return Math.abs(value) <= LARGEST; // false for NaN too
 }
 
 /** Null for what no unit can hold, such as a temperature below absolute zero. */
@@ -126,12 +133,12 @@ export function extremeOf(reading: Reading, entry: ReadingEntry | null, side: Si
     );
   }
   const value = side === "min" && reading.sampling === "lowest and highest" ? entry.lowest : entry.value;
-  if (value === null || !Number.isFinite(value)) return null;
+  if (value === null || !isUsable(value)) return null;
   return { value, atS: side === "max" ? entry.atS : null, label: null, row: -1 };
 }
 
 export function rawRows(entry: ReadingEntry): Raw[] {
-  return entry.rows.flatMap(({ value, atS, label }, row) => (Number.isFinite(value) ? [{ value, atS, label, row }] : []));
+  return entry.rows.flatMap(({ value, atS, label }, row) => (isUsable(value) ? [{ value, atS, label, row }] : []));
 }
 
 /** The entry that carries the moment of a value: its own, or the one whose moment it shares. */
@@ -153,7 +160,7 @@ export function trueSeries(entry: ReadingEntry, gauge: Gauge, unit: Unit): TrueS
   const series: TrueSeries = [];
   for (const { value, atS } of rawRows(entry)) {
     const corrected = correct(value, gauge, unit);
-    if (atS === null || !Number.isFinite(atS) || !corrected || corrected.beyond !== null) return null;
+    if (atS === null || !isUsable(atS) || !corrected || corrected.beyond !== null) return null;
     if (series.length > 0 && atS <= (series.at(-1)?.timeS ?? 0)) return null;
     series.push({ timeS: atS, value: corrected.value });
   }

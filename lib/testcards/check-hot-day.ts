@@ -3,7 +3,19 @@ import { hotDayAmbient, pressureAltitudeFromQnh } from "./atmosphere";
 import { type CardPoint, parameterOf, type Reading } from "./card";
 import { emptyLine, judged, normalIn, noVerdict, type Subject, whyOf } from "./check-as-flown";
 import type { Completion } from "./check-completion";
-import { type Corrected, converted, correct, extremeOf, type Gauge, momentOf, onTheDay, type Raw, rawRows, speaksFor } from "./check-gauge";
+import {
+  type Corrected,
+  converted,
+  correct,
+  extremeOf,
+  type Gauge,
+  isUsable,
+  momentOf,
+  onTheDay,
+  type Raw,
+  rawRows,
+  speaksFor,
+} from "./check-gauge";
 import type { AppliedLimit } from "./check-limits";
 import { hotDayTemperature } from "./cooling";
 import { OUTSIDE_AIR, outsideAirGauge, PRESSURE_ALTITUDE } from "./debrief";
@@ -147,10 +159,10 @@ function airAt(subject: Subject, raw: Raw): Air | NoAir {
     holder?.oat ??
     sameMoment(subject, raw, OUTSIDE_AIR) ??
     (point.place === "ground" && weather ? converted(weather.value, weather.unit, instrument?.unit ?? "degC") : null);
-  if (measured === null) return { reason: "no reading", why: "no outside air temperature at that moment" };
+  if (measured === null || !isUsable(measured)) return { reason: "no reading", why: "no outside air temperature at that moment" };
   const altitudeFt =
     point.place === "ground" ? groundAltitudeFt(subject) : (holder?.altitudeFt ?? sameMoment(subject, raw, PRESSURE_ALTITUDE));
-  if (altitudeFt === null)
+  if (altitudeFt === null || !isUsable(altitudeFt))
     return { reason: "no reading", why: point.place === "ground" ? "no QNH for the height of the ground" : "no height at that moment" };
   if (!gauge) {
     const kelvin = converted(measured, "degC", "K");

@@ -93,6 +93,8 @@ const GAUGES: Gauge[] = [
   ["RPM", "rpm", "rpm", 0, 3300, 50, 10, 20, truly(800, 1800, 2600, 2800)],
   ["OAT", "oat", "degC", -30, 50, 1, 1, 1, truly(-20, 0, 20, 45)],
   ["LOGGER-COOLANT", "coolant", "degC", -20, 150, 0.1, 0.1, 1.5, truly(0, 50, 90, 125)],
+  ["LOGGER-SKIN", "skin", "degC", -20, 150, 0.1, 0.1, 3, truly(0, 50, 90, 120)],
+  ["LOGGER-LINE", "line", "degC", -20, 100, 0.1, 0.1, 2, truly(0, 30, 50, 70)],
 ];
 
 const instruments: Instrument[] = GAUGES.map(([id, parameter, unit, low, high, markSpacing, readable, u, table]) => ({
@@ -125,6 +127,8 @@ const MEASURED: Measured[] = [
   ["oil-t", "Oil temperature", "degC", "plus-one", [70, 105], true],
   ["tit", "Turbine inlet", "degC", "plus-one", [700, 850], false],
   ["iat", "Induction air", "degC", "ratio", [10, 50], false],
+  ["skin", "Cowl inner skin", "degC", "plus-one", null, false],
+  ["line", "Fuel line skin", "degC", "plus-one", null, false],
   ["oil-p", "Oil pressure", "psi", "none", [45, 65], false],
   ["rpm", "RPM", "rpm", "none", null, false],
   ["oat", "Outside air", "degC", "none", null, false],
@@ -153,6 +157,8 @@ const ROWS: Row[] = [
   ["oil-t", "min", "full power", 0, 45, 50, "degC"],
   ["tit", "max", "always", 0, 900, 880, "degC"],
   ["iat", "max", "always", 0, 65, 60, "degC"],
+  ["skin", "max", "always", 0, 105, 98, "degC"],
+  ["line", "max", "always", 0, 58, 52, "degC"],
   ["oil-p", "max", "always", 0, 75, 72, "psi"],
   ["oil-p", "max", "cold start", 0, 100, 97, "psi"],
   ["oil-p", "min", "at power", 0, 30, 33, "psi"],
@@ -277,6 +283,8 @@ const INSTRUMENT_OF: Record<string, string> = {
   tit: "TIT",
   iat: "IAT",
   "oil-p": "OIL-P",
+  skin: "LOGGER-SKIN",
+  line: "LOGGER-LINE",
   rpm: "RPM",
   oat: "OAT",
 };

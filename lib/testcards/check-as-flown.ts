@@ -34,7 +34,8 @@ export function asFlownLine(subject: Subject, limit: AppliedLimit): CheckLine | 
   if (figure === null) return null;
   const { gauge } = subject;
   const { corrected } = figure;
-  const reasons = [...figure.reasons, ...(corrected?.reasons ?? gauge.reasons), ...subject.withheld.map(({ reason }) => reason)];
+  // a reading, a valid calibration and U are enough here: what was true that day does not hang on condition, time run or configuration
+  const reasons = [...figure.reasons, ...(corrected?.reasons ?? gauge.reasons)];
   const level = limit.statistic === "instant" || limit.statistic === "sustained";
   const judgement =
     corrected === null

@@ -1,6 +1,5 @@
 /** One debrief against one card: every line, what it means for its point, and what follows for the next step. */
 
-import { debriefAsJudged } from "./amend-debrief";
 import { decideAfterFlight } from "./buildup";
 import type { CardDocument, CardPoint } from "./card";
 import { abortReport } from "./check-abort";
@@ -10,6 +9,7 @@ import { findingsOf, outsideExpected, squawksOf, withheldOn } from "./check-foll
 import { gaugeOf } from "./check-gauge";
 import { hotDayLine } from "./check-hot-day";
 import { limitsOn } from "./check-limits";
+import { debriefAsJudged } from "./debrief-as-judged";
 import type { CheckContext, CheckLine, CheckReport, Debrief, PointReport } from "./debrief-types";
 import { worst } from "./verdict";
 import type { StepDecision, Verdict } from "./words";

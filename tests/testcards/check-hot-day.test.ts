@@ -150,6 +150,10 @@ describe("what takes the hot-day verdict away", () => {
     const other = { context: { configurationId: "c-15" } };
     const line = hot([coolant, oat], { ...withOat, coolant: { value: 100 } }, other);
     expect(line).toMatchObject({ verdict: "no verdict", reasons: ["wrong configuration"], why: "the card is for configuration C-14" });
+    const card = sampleCard([samplePoint({ readings: [coolant, oat] })]);
+    const report = checked(card, typedDebrief(card, { p1: { readings: withOat } }), other.context);
+    expect(lineOf(report, "coolant", "as flown, card").verdict).toBe("within");
+    expect(report).toMatchObject({ decision: "hold" });
   });
 
   test("lists every reason in the fixed order", () => {

@@ -102,7 +102,7 @@ export const climbDebrief = (document: CardDocument): Debrief =>
       topAltitudeFt: 10_100,
       comment: "Smooth above 3000 ft. Level at 10 100 ft, clear of cloud.",
       readings: {
-        "t10-oat": { value: 7, altitudeFt: 5900 },
+        "t10-oat": { value: 7 },
         "t10-coolant": { value: 95, ...atPeak },
         "t10-cht": { value: 265, ...withCoolant },
         "t10-oil-t": { value: 105, ...withCoolant },

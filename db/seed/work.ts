@@ -1,5 +1,6 @@
 import type { CardDocument } from "@/lib/testcards/card";
 import type { Debrief } from "@/lib/testcards/debrief-types";
+import type { StepDecision } from "@/lib/testcards/words";
 import { commentOnCard } from "@/lib/workflow/card/comment-on-card";
 import { reviseCard } from "@/lib/workflow/card/revise-card";
 import { withdrawCard } from "@/lib/workflow/card/withdraw-card";
@@ -9,6 +10,8 @@ import { briefSortie } from "@/lib/workflow/sortie/brief-sortie";
 import { disposePoint } from "@/lib/workflow/sortie/dispose-point";
 import { planSortie } from "@/lib/workflow/sortie/plan-sortie";
 import { getSortie } from "@/lib/workflow/sortie/queries";
+import { countersignStep } from "@/lib/workflow/step/countersign-step";
+import { proposeStep } from "@/lib/workflow/step/propose-step";
 import { PROGRAMME_ID } from "./aircraft";
 import { climbCard, cowlShutCard, DAYS, groundRunCard, POINT_IDS, taxiCard, unfinishedCard } from "./cards";
 import { dayFrom } from "./days";
@@ -30,6 +33,7 @@ export function doTheWork(desk: Desk, demoDate: string): void {
     loading: { baggageKg: 0, fuelOnBoardL: 40, forecastOatC: 21 },
     debrief: groundRunDebrief,
     point: POINT_IDS.T01,
+    step: { decision: "clear to next step", why: "above normal on the hot day, 5.6 °C in hand on coolant" },
   });
 
   const climb = desk.writeCard("07", -13, climbCard(demoDate, 60));
@@ -51,6 +55,10 @@ export function doTheWork(desk: Desk, demoDate: string): void {
     loading: { baggageKg: 6, fuelOnBoardL: 64, forecastOatC: 18 },
     debrief: climbDebrief,
     point: POINT_IDS.T10,
+    step: {
+      decision: "hold",
+      why: "Coolant 115.2 °C on the hot day against 115: more cooling, a higher climb speed, or a climb at reduced power",
+    },
   });
 
   const taxi = desk.writeCard("05", -3, taxiCard(demoDate));
@@ -99,10 +107,14 @@ function plan(desk: Desk, demoDate: string, { day, plannedFrom, kind, revisionId
   }).id;
 }
 
-type Flight = Omit<Plan, "plannedFrom"> & { debrief: (document: CardDocument) => Debrief; point: string };
+type Flight = Omit<Plan, "plannedFrom"> & {
+  debrief: (document: CardDocument) => Debrief;
+  point: string;
+  step: { decision: StepDecision; why: string };
+};
 
 function flySortie(desk: Desk, demoDate: string, flight: Flight): void {
-  const { day, revisionId, debrief, point } = flight;
+  const { day, revisionId, debrief, point, step } = flight;
   const sortieId = plan(desk, demoDate, { ...flight, plannedFrom: day - 1 });
   const pilot = (hhmm: string) => desk.as("pilot", day, hhmm);
   const ctx = pilot("07:30");
@@ -114,4 +126,6 @@ function flySortie(desk: Desk, demoDate: string, flight: Flight): void {
   briefSortie(pilot("07:45"), { sortieId, goNoGo: SETTINGS.goNoGo.map((line) => ({ line, go: true })), answers: answersTo(findings) });
   submitDebrief(pilot("10:25"), { id: desk.newDebriefId(), sortieId, content: debrief(card.document) });
   disposePoint(desk.as("engineer", day, "13:00"), { sortieId, revisionId, pointId: point, disposition: "accept" });
+  const { id, stands } = proposeStep(desk.as("engineer", day, "13:20"), { sortieId, revisionId, pointId: point, ...step });
+  if (!stands) countersignStep(desk.as("reviewer", day, "16:00"), { stepId: id });
 }

@@ -20,6 +20,7 @@ import {
 import { demoDateOf, seedDemo } from "@/db/seed";
 import { PROGRAMME_ID } from "@/db/seed/aircraft";
 import { openDesk } from "@/db/seed/desk";
+import { PEOPLE } from "@/db/seed/people";
 import { CHAIN_START, eventDigest } from "@/lib/audit/append-audit";
 import { matchesPassword } from "@/lib/auth/password";
 import type { CheckLine, CheckReport } from "@/lib/testcards/debrief-types";
@@ -265,6 +266,15 @@ describe("the earlier steps", () => {
       [55, 91.7],
       [60, 95.3],
     ]);
+  });
+
+  test("are followed by what the two sorties came to: the run clear and countersigned, the climb on hold", () => {
+    const flown = db.select().from(stepDecisions).where(eq(stepDecisions.origin, "flown")).orderBy(stepDecisions.position).all();
+    expect(flown.map(({ testPointCode, computed, decision }) => [testPointCode, computed, decision])).toEqual([
+      ["T01", "clear to next step", "clear to next step"],
+      ["T10", "hold", "hold"],
+    ]);
+    expect(flown.map(({ countersignedBy }) => countersignedBy)).toEqual([PEOPLE.reviewer.id, null]);
   });
 
   test("the shelf holds 26 templates", () => {

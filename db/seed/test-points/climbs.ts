@@ -29,7 +29,7 @@ const climb: Pick<Parameters<typeof testPoint>[1], "place" | "cowl" | "condition
 const T10 = testPoint("T10", {
   ...climb,
   title: "Climb cooling",
-  purpose: "Hot-day margin up to the critical altitude. Oxygen as the law requires.",
+  purpose: "Hot-day margin up to the critical altitude. Take-off mass 588-600 kg; oxygen as the law requires.",
   entryText: "level 75 % stabilised   1000 AGL or above",
   entry: [entry("ias", "about", 68, 2)],
   steps: [

@@ -56,7 +56,7 @@ const T21 = testPoint("T21", {
     power("65 %, 2350/24.0, the same", 2350, 24, 480),
     power("75 %, 2400/26.0, the same", 2400, 26, 480),
   ],
-  grid: byTime("min", counting(1, 24)),
+  grid: byTime("min", counting(2, 24, 2)),
   readings: [
     read("ias", { sampling: "single", sheet: "grid" }),
     read("oat", { sampling: "single", sheet: "grid" }),

@@ -11,7 +11,9 @@ type Who = { actor: { id: string; name: string; teamId: string }; now: Date };
 
 /** The digest of one event over everything it says and the digest before it: SHA-256 of canonical JSON (RFC 8785). */
 export function eventDigest(event: Omit<typeof auditEvents.$inferSelect, "digest">): string {
-  return createHash("sha256").update(canonicalize(event) ?? "").digest("hex");
+  return createHash("sha256")
+    .update(canonicalize(event) ?? "")
+    .digest("hex");
 }
 
 export const CHAIN_START = "0".repeat(64);
@@ -37,5 +39,7 @@ export function appendAudit(tx: Tx, { actor, now }: Who, action: string, { subje
     after: after ?? null,
     previousDigest: last?.digest ?? CHAIN_START,
   };
-  tx.insert(auditEvents).values({ ...event, digest: eventDigest(event) }).run();
+  tx.insert(auditEvents)
+    .values({ ...event, digest: eventDigest(event) })
+    .run();
 }

@@ -60,7 +60,7 @@ class RenderQueue {
     if (this.child?.connected) return this.child;
     const folder = projectFolder();
     const tsx = pathToFileURL(join(folder, "node_modules", "tsx", "dist", "esm", "index.mjs")).href;
-    const child = fork(join(folder, "lib", "pdf", "render-worker", "child.ts"), [], {
+    const child = fork(/* turbopackIgnore: true */ join(folder, "lib", "pdf", "render-worker", "child.ts"), [], {
       cwd: folder,
       execArgv: ["--import", tsx],
       serialization: "advanced",

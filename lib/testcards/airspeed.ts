@@ -13,9 +13,9 @@ function checkAir(pressurePa: number, temperatureK: number): void {
   checkRange("temperatureK", temperatureK, 180, 340);
 }
 
-/** Impact pressure over static pressure at a Mach number, and back; [AC-23-8] appendix on airspeed, γ = 1.4. */
-const impactRatio = (mach: number): number => (1 + 0.2 * mach * mach) ** 3.5 - 1;
-const machOf = (ratio: number): number => Math.sqrt(5 * ((ratio + 1) ** (2 / 7) - 1));
+/** Impact pressure over static pressure at a Mach number, and back: isentropic flow, γ = 1.4. */
+const impactRatio = (mach: number): number => Math.expm1(3.5 * Math.log1p(0.2 * mach * mach));
+const machOf = (ratio: number): number => Math.sqrt(5 * Math.expm1((2 / 7) * Math.log1p(ratio)));
 
 function machFromCalibrated(casMps: number, pressurePa: number): number {
   checkRange("casMps", casMps, 0, SEA_LEVEL_SOUND_MPS);

@@ -40,7 +40,7 @@ export function checkCalibration(c: Calibration): void {
   for (const point of c.points) {
     checkFinite("calibration.points.read", point.read);
     checkFinite("calibration.points.actual", point.actual);
-    if (previous && (point.read <= previous.read || point.actual <= previous.actual))
+    if (previous && (point.read < previous.read + ROUNDING || point.actual < previous.actual + ROUNDING))
       throw new RangeError(
         `calibration.points goes from ${previous.read} -> ${previous.actual} to ${point.read} -> ${point.actual}; both figures must rise.`,
       );

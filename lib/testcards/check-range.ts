@@ -5,8 +5,13 @@
 
 const show = (value: unknown): string => (typeof value === "number" ? String(value) : JSON.stringify(value));
 
-/** Throws RangeError unless `value` is a finite number; answers it. */
+/** No figure of this trade is larger; beyond it products and quotients could overflow. */
+const LARGEST = 1e15;
+const SMALLEST_DIVISOR = 1e-12;
+
+/** Throws RangeError unless `value` is a finite number of a size that measurements have; answers it. */
 export function checkFinite(name: string, value: number): number {
+  if (Math.abs(value) > LARGEST && Number.isFinite(value)) throw new RangeError(`${name} is ${value}; it must be from -1e15 to 1e15.`);
   if (typeof value !== "number" || !Number.isFinite(value)) throw new RangeError(`${name} is ${show(value)}; it must be a finite number.`);
   return value;
 }
@@ -21,7 +26,7 @@ export function checkRange(name: string, value: number, low: number, high: numbe
 /** Throws RangeError unless value is above zero; answers it. */
 export function checkPositive(name: string, value: number): number {
   checkFinite(name, value);
-  if (value <= 0) throw new RangeError(`${name} is ${value}; it must be above 0.`);
+  if (value < SMALLEST_DIVISOR) throw new RangeError(`${name} is ${value}; it must be above 0.`);
   return value;
 }
 

@@ -260,7 +260,7 @@ export function heatSoak(series: readonly Sample[], { ambientK }: { ambientK?: n
   const { first, last } = endsOf(series);
   const top = peak(series);
   const hottest = highest(series);
-  const cooled = ambientK !== undefined && last.value > ambientK && last.value < hottest.value;
+  const cooled = ambientK !== undefined && last.value > ambientK + 1e-9 && last.value < hottest.value - 1e-9;
   const coolDownTimeConstantS = cooled
     ? (last.timeS - hottest.timeS) / Math.log((hottest.value - ambientK) / (last.value - ambientK))
     : null;

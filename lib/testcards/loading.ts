@@ -12,7 +12,7 @@ const EDGE = 1e-9;
  *
  *     m = Σ mᵢ    cg = Σ (mᵢ · armᵢ)/m
  *
- * Source    [PHAK] ch. 10, computational method.
+ * Source    [PHAK] ch. 9, computational method.
  * Inputs    one entry a station; arms in metres from one datum, negative ahead of it. A negative mass takes load away.
  * Domain    at least one station, total mass above zero.
  * Throws    RangeError outside the domain.
@@ -47,7 +47,7 @@ function roomAcross(corners: readonly Point[], at: number, across: number): numb
 /**
  * Whether a loading lies inside the mass and centre-of-gravity envelope, and how far from its edges.
  *
- * Source    [PHAK] ch. 10, centre-of-gravity limits; straight lines between corners.
+ * Source    [PHAK] ch. 9, centre-of-gravity limits; straight lines between corners.
  * Inputs    corners in order round the envelope; metres from the same datum as the loading.
  * Domain    at least 3 corners enclosing an area without a notch (every line of one mass or one CG crosses it once).
  * Throws    RangeError outside the domain.

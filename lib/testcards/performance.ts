@@ -32,7 +32,7 @@ export function climbRateToStandard(input: {
  *
  *     V_std = V · √(m_std/m)
  *
- * Source    [PHAK] ch. 5, load factor and stall speed: lift coefficient at the stall unchanged.
+ * Source    [PHAK] ch. 4, stall speed and load: lift coefficient at the stall unchanged.
  * Inputs    speedMps calibrated; masses in kg.
  * Domain    all above zero.
  * Throws    RangeError outside the domain.
@@ -89,7 +89,7 @@ export function vibrationVelocity({ accelerationMps2, frequencyHz }: { accelerat
  *
  *     ε = (T_compressor − T_intercooler)/(T_compressor − T_ambient)
  *
- * Source    hand calculation from the definition of effectiveness, [CENGEL] ch. 11.
+ * Source    hand calculation from the definition of a heat exchanger's effectiveness.
  * Inputs    kelvins; air out of the compressor, out of the intercooler, and ambient.
  * Domain    ambient ≤ intercooler out ≤ compressor out, compressor out above ambient.
  * Throws    RangeError outside the domain: check the probes.

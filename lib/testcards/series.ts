@@ -4,6 +4,9 @@ import { checkCount, checkFinite, checkResult } from "./check-range";
 export type Series = { timeS: number; value: number }[];
 export type Sample = Series[number];
 
+/** Two readings nearer than this are at one time, and a rate between them means nothing. */
+const SHORTEST_STEP_S = 1e-6;
+
 /** Throws RangeError unless the series holds `least` finite readings whose times rise. */
 export function checkSeries(series: readonly Sample[], least = 1): void {
   checkCount("series", series, least);
@@ -11,7 +14,7 @@ export function checkSeries(series: readonly Sample[], least = 1): void {
   for (const { timeS, value } of series) {
     checkFinite("series.timeS", timeS);
     checkFinite("series.value", value);
-    if (previous !== undefined && timeS <= previous)
+    if (previous !== undefined && timeS < previous + SHORTEST_STEP_S)
       throw new RangeError(`series.timeS goes from ${previous} to ${timeS}; times must rise.`);
     previous = timeS;
   }

@@ -32,7 +32,7 @@ export function fitLine(name: string, points: readonly { x: number; y: number }[
   const meanX = points.reduce((sum, p) => sum + p.x, 0) / count;
   const meanY = points.reduce((sum, p) => sum + p.y, 0) / count;
   const sumSquaresX = points.reduce((sum, p) => sum + (p.x - meanX) ** 2, 0);
-  if (sumSquaresX === 0) throw new RangeError(`${name} has the same value ${meanX} throughout; it must hold at least 2 different ones.`);
+  if (sumSquaresX < 1e-24) throw new RangeError(`${name} has the same value ${meanX} throughout; it must hold at least 2 different ones.`);
 
   const slope = points.reduce((sum, p) => sum + (p.x - meanX) * (p.y - meanY), 0) / sumSquaresX;
   const rss = points.reduce((sum, p) => sum + (p.y - meanY - slope * (p.x - meanX)) ** 2, 0);

@@ -39,7 +39,7 @@ function incompleteBeta(x: number, a: number, b: number): number {
  *
  *     P(|t| ≤ q) = 1 − I_x(ν/2, ½), x = ν/(ν + q²)
  *
- * Source    [AS] 26.7.1 with 26.5.27, turned round by bisection; [STUDENT-T] table.
+ * Source    [AS] 26.7.1 with 26.5.27, turned round by bisection; [NIST-HANDBOOK] 1.3.6.7.2 table.
  * Inputs    confidence of the two-sided interval, 0.95 for t(0.975); degrees of freedom ν.
  * Domain    0 < confidence < 1, here 0.01 to 0.999; ν whole, at least 1.
  * Throws    RangeError outside the domain.

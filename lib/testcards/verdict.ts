@@ -40,7 +40,7 @@ const ALWAYS_WITHHELD_ON_THE_HOT_DAY: readonly Reason[] = ["off condition", "wro
  * A reading beyond its table comes as the true value at that end with "outside calibrated range" withheld; it proves an exceedance
  * only when that value less U is past the limit, and no number is quoted.
  *
- * Source    [JCGM-106] 7.3.3 and 8.3, [ILAC-G8] 4.2 with w = U; equality and the order of reasons are the team's own rule.
+ * Source    [JCGM-106] 7.3 and 8.3, [ILAC-G8] 4.2 with w = U; equality and the order of reasons are the team's own rule.
  * Inputs    value, U (k = 2) and limit in one unit, true values; null for no reading. U null = not known, 0 for a count.
  * Domain    finite figures, U ≥ 0.
  * Throws    RangeError outside the domain or for an unknown word.
@@ -120,7 +120,7 @@ function probability(margin: number, u: number | null): number | null {
   if (u === null) return null;
   const z = u > 0 ? margin / (u / 2) : Number.NaN;
   if (!Number.isFinite(z)) return margin >= -TOLERANCE ? 1 : 0;
-  return normalCumulative(z);
+  return normalCumulative(Math.min(Math.max(z, -100), 100)); // 0 or 1 long before
 }
 
 /** The gravest of several verdicts: exceeded, then marginal, then no verdict, then within. Throws RangeError for none. */

@@ -153,7 +153,7 @@ export function testPoint(code: `T${string}`, spec: Spec): CardPoint {
   };
 }
 
-export const byTime = (head: string, rows: string[]): CardPoint["grid"] => ({ head, unit: "min", by: "time", rows, timeColumn: false });
+export const byTime = (head: string, rows: string[]): CardPoint["grid"] => ({ head, unit: null, by: "time", rows, timeColumn: false });
 export const byHeight = (rows: string[]): CardPoint["grid"] => ({ head: "1000 ft", unit: null, by: "height", rows, timeColumn: true });
 export const freely = (head: string, rows: string[], unit: Unit | null = null): CardPoint["grid"] => ({
   head,

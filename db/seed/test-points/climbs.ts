@@ -110,7 +110,7 @@ const T20 = testPoint("T20", {
   ],
   grid: freely("kt", SAWTOOTH_ROWS),
   readings: [
-    read("time", { label: "Seconds for 1000 ft", head: "s", sampling: "series", sheet: "grid" }),
+    read("time", { label: "Seconds for 1000 ft", head: "TIME", sampling: "series", sheet: "grid" }),
     read("oat", { label: "OAT mid-band", sampling: "single", sheet: "grid" }),
     read("coolant", { sheet: "grid", expected: [82, 100] }),
     read("cht", { sheet: "grid", expected: [225, 285] }),

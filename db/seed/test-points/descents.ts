@@ -43,7 +43,7 @@ const T16 = testPoint("T16", {
   entry: [entry("altitude", "about", 3000, 100), entry("oilT", "at least", 55), entry("coolant", "at least", 62.5)],
   steps: [power("Open over 2 s to 2700/30.0, 68 kt ±3", 2700, 30, 120), "COWL OPEN, climb 2 min"],
   readings: [
-    read("time", { id: "pick-up", label: "Pick-up, s", head: "s", sampling: "single", sheet: "single" }),
+    read("time", { id: "pick-up", label: "Pick-up", head: "TIME", sampling: "single", sheet: "single" }),
     read("rpm", { id: "rpm-full", label: "RPM at full power, highest", sheet: "single", when: ["full power"] }),
     read("map", { id: "map-full", label: "MAP at full power, highest", sheet: "single", when: ["full power"] }),
     read("oilT", {

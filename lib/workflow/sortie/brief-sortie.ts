@@ -21,12 +21,12 @@ export const briefSortie = defineUseCase({
       return { out: { id: sortieId, state: "briefed" as const, version: sortie.version }, audit: "unchanged" };
     requireThisPilot(tx, actor, sortieId);
     const planned = listSortieCards(tx, actor, sortie);
-    requireReleasedAndAccepted(planned);
     const findings = reviewSortie(
       toSortiePlan(sortie, listCrew(tx, sortieId), planned),
       getReadinessFacts(tx, actor, sortie.programmeId, { today }),
     );
     refuseFindings(openMusts(findings), "Not briefed. These are open");
+    requireReleasedAndAccepted(planned);
     const kept = Object.fromEntries(findings.map(findingKey).flatMap((key) => (answers[key]?.trim() ? [[key, answers[key].trim()]] : [])));
     refuseFindings(unanswered(findings, kept), "Answer each of these in one line before the brief");
     requireGo(getProgramme(tx, actor, sortie.programmeId).settings.goNoGo, goNoGo);

@@ -93,8 +93,10 @@ function thresholdOf(facts: CardFacts, line: NumberLine): { value: number; name:
   const parameter = facts.parameters.get(line.parameter);
   const calibration = instrument?.calibration;
   if (!instrument || !parameter || !calibration || line.perMinute) return null;
-  const back = correctReading(line.onGauge, calibration);
-  const value = back.inRange ? whereItFits(() => convert(back.value, instrument.unit, parameter.unit)) : null;
+  const value = whereItFits(() => {
+    const back = correctReading(line.onGauge, calibration);
+    return back.inRange ? convert(back.value, instrument.unit, parameter.unit) : null;
+  });
   return value === null ? null : { value, name: midSentence(parameter.shortName), unit: parameter.unit };
 }
 

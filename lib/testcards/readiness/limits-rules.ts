@@ -68,7 +68,7 @@ function limitUnits(facts: CardFacts): Problem[] {
     const parameter = facts.parameters.get(l.parameter);
     const rate = l.statistic === "rate" && isUnit(l.unit) && dimensionOf(l.unit) === "temperature rate";
     if (isUnit(l.unit) && (rate || !parameter || sameDimension(l.unit, parameter.unit))) return [];
-    const fault = isUnit(l.unit) ? `is in ${l.unit}, which does not measure it` : "has no unit";
+    const fault = isUnit(l.unit) ? `is in ${unitSymbol(l.unit)}, which does not measure it` : "has no unit";
     return [
       {
         message: `${nameOf(facts, l.parameter)} ${l.layer} limit ${figure(l.value)} ${fault}. Use the unit on the panel.`,
@@ -101,7 +101,9 @@ function readingUnits(facts: CardFacts): Problem[] {
           l.unit === "%" ||
           sameDimension(l.unit, reading.unit));
       if (comparable) return [];
-      const fault = isUnit(l.unit) ? `is in ${l.unit}, but its reading is in ${reading?.unit}` : "has no unit";
+      const fault = isUnit(l.unit)
+        ? `is in ${unitSymbol(l.unit)}, but its reading is in ${reading?.unit ? unitSymbol(reading.unit) : "no unit"}`
+        : "has no unit";
       return [{ message: `${name}: the limit ${l.label} ${fault}. Use the unit on the panel.`, where: atPoint(at, "limits", l.id) }];
     });
     const entries = point.entry.flatMap((e): Problem[] => {

@@ -256,9 +256,9 @@ describe("the list of rules", () => {
     const card = readyCard(Array.from({ length: 12 }, (_, i) => (i % 2 ? climb({ id: `p${i}` }) : shut({ id: `p${i}` }))));
     const context = readyContext();
     for (let i = 0; i < 50; i++) reviewCard(card, context, null);
-    const from = performance.now();
+    const from = process.cpuUsage().user;
     for (let i = 0; i < 50; i++) reviewCard(card, context, null);
-    // About 1 ms where it was written; ten times that would be felt.
-    expect((performance.now() - from) / 50).toBeLessThan(10);
+    // 2 to 5 ms of processor time where it was written; the mark is set where typing would feel it.
+    expect((process.cpuUsage().user - from) / 1000 / 50).toBeLessThan(30);
   });
 });

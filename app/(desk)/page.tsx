@@ -32,7 +32,7 @@ export default async function FlightLinePage() {
           <ul className="border-rule border-t">
             {waiting.map(({ key, head, text, address }) => (
               <li key={key} className="border-rule border-b">
-                <Link href={address} className="flex min-h-14 flex-wrap items-baseline gap-x-4 py-3 hover:bg-wash-grey">
+                <Link href={address} className="flex min-h-14 flex-wrap content-center items-baseline gap-x-4 py-3 hover:bg-wash-grey">
                   <span className="font-bold underline decoration-1 underline-offset-3">{head}</span>
                   <span className="text-ink-soft [overflow-wrap:anywhere]">{text}</span>
                 </Link>
@@ -61,7 +61,9 @@ function ProgrammePart({ programme, sorties }: { programme: ProgrammeListItem; s
           Open the programme
         </Link>
         {programme.summary ? <span>{programme.summary}</span> : null}
-        {programme.notice ? <span className="text-ink-soft">{programme.notice}</span> : null}
+        {programme.notice && !programme.summary.includes(programme.notice) ? (
+          <span className="text-ink-soft">{programme.notice}</span>
+        ) : null}
       </p>
       {sorties.length === 0 ? (
         <EmptyState title="No sorties yet">A sortie takes released cards to a day, a crew and a configuration.</EmptyState>
@@ -87,7 +89,7 @@ function SortieTable({ sorties, address, more }: { sorties: SortieListItem[]; ad
           {sorties.map(({ id, number, kind, plannedOn, cards, pilot, state }) => (
             <Row key={id}>
               <RowHead>
-                <Link href={`${address}/sorties/${id}`} className="link inline-block py-1 font-bold">
+                <Link href={`${address}/sorties/${id}`} className="link py-1 font-bold">
                   Sortie {number}
                 </Link>
                 <span className="text-ink-soft">, {kind}</span>

@@ -1,7 +1,7 @@
 import { classNames } from "@/components/ui/class-names";
 import { layOutStrip, type Strip, type StripLayout } from "./strip-layout";
 
-const LENGTH = 320;
+const PHONE_LENGTH = 320;
 const PAD = 10;
 const TRACK_TOP = 34;
 const TRACK = 9;
@@ -10,18 +10,28 @@ const TRACK = 9;
  * A straight gauge with the markings of 14 CFR 23.1549: green for normal, yellow for caution, a red radial at the placard.
  * Open triangle: reading on the gauge. Filled triangle: true. Diamond: hot day. A bar through a mark is its U.
  */
-export function ArcStrip({ title, strip, className }: { title: string; strip: Strip; className?: string }) {
-  const layout = layOutStrip(strip, LENGTH);
+export function ArcStrip({
+  title,
+  strip,
+  length = PHONE_LENGTH,
+  className = "max-w-[22rem]",
+}: {
+  title: string;
+  strip: Strip;
+  length?: number;
+  className?: string;
+}) {
+  const layout = layOutStrip(strip, length);
   const summary = [...strip.marks.map((mark) => mark.label), ...strip.limits.map((limit) => limit.label)].join(", ");
   const height = TRACK_TOP + TRACK + (strip.marks.length > 0 ? 38 : 8);
   return (
     <svg
-      viewBox={`${-PAD} 0 ${LENGTH + 2 * PAD} ${height}`}
+      viewBox={`${-PAD} 0 ${length + 2 * PAD} ${height}`}
       role="img"
       aria-label={`${title}: ${summary}`}
-      className={classNames("block h-auto w-full max-w-[22rem] overflow-visible", className)}
+      className={classNames("block h-auto w-full overflow-visible", className)}
     >
-      <rect x="0" y={TRACK_TOP} width={LENGTH} height={TRACK} className="fill-wash-grey" />
+      <rect x="0" y={TRACK_TOP} width={length} height={TRACK} className="fill-wash-grey" />
       {layout.zones.map((zone) => (
         <rect
           key={`${zone.tone}${zone.from}`}

@@ -54,13 +54,13 @@ export function Section({
 }
 
 /** Terms and what stands for them, two columns where there is room. */
-export function Facts({ items }: { items: { term: string; value: ReactNode }[] }) {
+export function Facts({ items, columns = 2 }: { items: { term: string; value: ReactNode }[]; columns?: 1 | 2 }) {
   return (
-    <dl className="grid grid-cols-1 gap-x-8 hand:grid-cols-2">
+    <dl className={columns === 1 ? "grid grid-cols-1" : "grid grid-cols-1 gap-x-8 hand:grid-cols-2"}>
       {items.map(({ term, value }) => (
         <div key={term} className="flex items-baseline justify-between gap-4 border-rule border-b py-2">
-          <dt className="text-ink-soft">{term}</dt>
-          <dd className="text-end">{value}</dd>
+          <dt className="shrink-0 text-ink-soft">{term}</dt>
+          <dd className="min-w-0 text-end">{value}</dd>
         </div>
       ))}
     </dl>

@@ -5,12 +5,13 @@ import { classNames } from "./class-names";
 export function Table({ label, className, children, ...rest }: ComponentProps<"table"> & { label: string }) {
   return (
     // biome-ignore lint/a11y/noNoninteractiveTabindex: a scrolling region must be reachable by key.
-    <section aria-label={label} tabIndex={0} className="max-w-full overflow-x-auto">
+    // biome-ignore lint/a11y/useSemanticElements: a fieldset holds controls, this a table.
+    <div role="group" aria-label={label} tabIndex={0} className="relative max-w-full overflow-x-auto">
       <table className={classNames("w-full border-collapse", className)} {...rest}>
         <caption className="sr-only">{label}</caption>
         {children}
       </table>
-    </section>
+    </div>
   );
 }
 

@@ -15,10 +15,14 @@ export function ProgrammeName({ programmes }: { programmes: ProgrammeLabel[] }) 
   if (!current) return null;
   return (
     <p className="min-w-0 truncate border-spine-ink/30 hand:border-s hand:ps-4">
-      <span className="max-desk:sr-only">{current.aircraft}</span>
-      <span aria-hidden="true" className="px-2 max-desk:hidden">
-        /
-      </span>
+      {current.name.startsWith(current.aircraft) ? null : (
+        <>
+          <span className="max-desk:sr-only">{current.aircraft}</span>
+          <span aria-hidden="true" className="px-2 max-desk:hidden">
+            /
+          </span>
+        </>
+      )}
       <Link href={`/programmes/${current.id}`} className="font-bold hover:underline">
         {current.name}
       </Link>

@@ -9,7 +9,7 @@ export function TopBar({ programmes, person, light }: { programmes: ProgrammeLab
   return (
     <header className="on-spine no-print flex min-h-14 items-center gap-x-4 bg-spine px-2 text-spine-ink desk:px-6">
       <Drawer programmes={programmes} person={person} light={light} />
-      <Link href="/" className="rounded-md py-2" title="Flight line">
+      <Link href="/" className="inline-flex rounded-md py-2" title="Flight line">
         <Brand />
       </Link>
       <ProgrammeName programmes={programmes} />

@@ -24,6 +24,7 @@ export function AircraftSection({
       <div className="grid gap-x-12 gap-y-8 desk:grid-cols-2">
         <div className="flex flex-col gap-6">
           <Facts
+            columns={1}
             items={[
               { term: "Greatest mass", value: mass(aircraft.maxMassKg) },
               { term: "Empty", value: `${mass(aircraft.emptyMassKg)} at ${formatNumber(aircraft.emptyArmM, 3)} m` },

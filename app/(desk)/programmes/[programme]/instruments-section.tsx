@@ -28,47 +28,42 @@ export function InstrumentsSection({
       <Table label="Instruments and calibrations">
         <TableHead>
           <HeadCell>Instrument</HeadCell>
-          <HeadCell>Reads</HeadCell>
           <HeadCell figures>Range</HeadCell>
-          <HeadCell figures>Readable to</HeadCell>
-          <HeadCell>Calibration</HeadCell>
           <HeadCell figures>U (k = 2)</HeadCell>
           <HeadCell>Indicated to true</HeadCell>
+          <HeadCell>Calibration</HeadCell>
         </TableHead>
         <tbody>
           {instruments.map((instrument) => (
             <Row key={instrument.id}>
-              <RowHead className="min-w-44">
-                <span className="font-bold">{instrument.name}</span>
+              <RowHead className="min-w-64">
+                <span className="font-bold">{instrument.name}</span>{" "}
+                {parameters.find(({ code }) => code === instrument.parameter)?.name ?? instrument.parameter}
                 <span className="block text-ink-soft text-sm">
-                  “{instrument.gaugeName}” on {instrument.shownOn === "panel" ? "the panel" : `a ${instrument.shownOn}`}, seen by{" "}
-                  {listAnd(instrument.visibleTo) || "nobody in flight"}
+                  “{instrument.gaugeName}”, {instrument.shownOn}, seen by {listAnd(instrument.visibleTo) || "nobody in flight"}
                 </span>
               </RowHead>
-              <Cell className="min-w-32">{parameters.find(({ code }) => code === instrument.parameter)?.name ?? instrument.parameter}</Cell>
-              <Cell figures>{withUnit(`${figure(instrument.low)} to ${figure(instrument.high)}`, instrument.unit)}</Cell>
-              <Cell figures>{formatQuantity({ value: instrument.readable, unit: instrument.unit })}</Cell>
-              <Cell className="min-w-56">
+              <Cell figures>
+                {withUnit(`${figure(instrument.low)} to ${figure(instrument.high)}`, instrument.unit)}
+                <span className="block text-ink-soft text-sm">
+                  readable to {formatQuantity({ value: instrument.readable, unit: instrument.unit })}
+                </span>
+              </Cell>
+              <Cell figures>{instrument.calibration ? uncertaintyWords(instrument.calibration) : "—"}</Cell>
+              <Cell className="min-w-60">{instrument.calibration ? <CalibrationTable calibration={instrument.calibration} /> : "—"}</Cell>
+              <Cell className="min-w-72">
                 <CalibrationState calibration={instrument.calibration} today={today} />
               </Cell>
-              <Cell figures>
-                {instrument.calibration
-                  ? withUnit(
-                      formatUncertainty(
-                        instrument.calibration.expandedUncertainty,
-                        ownDecimals(instrument.calibration.expandedUncertainty ?? 0),
-                      ),
-                      instrument.unit,
-                    )
-                  : "—"}
-              </Cell>
-              <Cell className="min-w-56">{instrument.calibration ? <CalibrationTable calibration={instrument.calibration} /> : "—"}</Cell>
             </Row>
           ))}
         </tbody>
       </Table>
     </Section>
   );
+}
+
+function uncertaintyWords({ expandedUncertainty: U, unit }: CalibrationRecord): string {
+  return withUnit(formatUncertainty(U, ownDecimals(U ?? 0)), unit);
 }
 
 function CalibrationState({ calibration, today }: { calibration: CalibrationRecord | null; today: string }) {
@@ -82,7 +77,8 @@ function CalibrationState({ calibration, today }: { calibration: CalibrationReco
       {!moved && left >= 0 ? (
         <Badge tone={left <= SOON_DAYS ? "yellow" : "green"}>{left <= SOON_DAYS ? `ends in ${left} days` : "in calibration"}</Badge>
       ) : null}
-      <span className="block text-sm">
+      <span className="whitespace-nowrap text-sm">
+        {" "}
         {formatDay(calibration.calibratedOn)} until {formatDay(calibration.validUntil)}
       </span>
       <span className="block text-ink-soft text-sm">

@@ -12,9 +12,12 @@ export default async function ProgrammeLayout({ children, params }: { children: 
       <div className="desk:relative">
         <BinderTabs programmeId={id} />
         {settings.notice ? (
-          <p className="border-rule border-b px-4 py-2 text-ink-soft text-sm desk:absolute desk:end-6 desk:bottom-2.5 desk:border-0 desk:p-0">
+          <aside
+            aria-label="Notice"
+            className="border-rule border-b px-4 py-2 text-ink-soft text-sm desk:absolute desk:end-6 desk:bottom-2.5 desk:border-0 desk:p-0"
+          >
             {settings.notice}
-          </p>
+          </aside>
         ) : null}
       </div>
       {children}

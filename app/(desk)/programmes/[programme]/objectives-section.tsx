@@ -55,7 +55,7 @@ function PointLinks({ points, programmeId }: { points: TestPoint[]; programmeId:
   return (
     <span className="flex flex-wrap gap-x-3">
       {points.map(({ code, title }) => (
-        <Link key={code} href={`/programmes/${programmeId}/test-points/${code}`} title={title} className="link inline-block py-1">
+        <Link key={code} href={`/programmes/${programmeId}/test-points/${code}`} title={title} className="link py-1">
           {code}
         </Link>
       ))}

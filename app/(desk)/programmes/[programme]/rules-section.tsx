@@ -30,7 +30,7 @@ export function RulesSection({
         <List title="Go or no-go: any no stops" items={settings.goNoGo} />
         <div>
           <h3 className="pb-1 font-bold">Call words</h3>
-          <Facts items={settings.callWords.map(({ word, meaning }) => ({ term: word, value: meaning }))} />
+          <Facts columns={1} items={settings.callWords.map(({ word, meaning }) => ({ term: word, value: meaning }))} />
         </div>
         <List title="Then, in the air, in this order" items={settings.thenActions.air} ordered />
         <List title="Then, on the ground, in this order" items={settings.thenActions.ground} ordered />

@@ -84,7 +84,7 @@ function Steps({ points, decisions, programmeId }: { points: TestPoint[]; decisi
             <Row key={code}>
               <Cell>{content.order}</Cell>
               <RowHead className="min-w-52">
-                <Link href={`/programmes/${programmeId}/test-points/${code}`} className="link inline-block py-1 font-bold">
+                <Link href={`/programmes/${programmeId}/test-points/${code}`} className="link py-1 font-bold">
                   {code} {title}
                 </Link>
               </RowHead>

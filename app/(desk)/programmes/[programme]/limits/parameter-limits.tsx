@@ -11,6 +11,7 @@ import { convert, sameDimension } from "@/lib/testcards/units";
 import { abortRow, type LimitRow, limitRow, normalRow } from "./limit-rows";
 
 type NumberAbort = Extract<AbortLine, { kind: "number" }>;
+const DRAWN_WHEN = new Set<Limit["appliesWhen"]>(["always", "at power", "full power"]);
 const figure = (value: number) => formatNumber(value, ownDecimals(value));
 
 export function ParameterLimits({
@@ -32,7 +33,12 @@ export function ParameterLimits({
   ];
   return (
     <Section id={parameter.code} title={parameter.name} aside={`hot-day rule: ${parameter.hotDayRule}`}>
-      <ArcStrip title={`${parameter.name}, true`} strip={stripOf(parameter, limits, aborts, instruments)} className="pb-4" />
+      <ArcStrip
+        title={`${parameter.name}, true`}
+        strip={stripOf(parameter, limits, aborts, instruments)}
+        length={560}
+        className="max-w-[36rem] pb-4"
+      />
       <Table label={`Limits of ${parameter.name}`}>
         <TableHead>
           <HeadCell>Layer</HeadCell>
@@ -83,15 +89,14 @@ function LimitLine({ row: { layer, words, trueText, onGauges, source } }: { row:
 /** The layers that hold in running, on the parameter's own scale; moments of their own stand in the table only. */
 function stripOf(parameter: Parameter, limits: Limit[], aborts: NumberAbort[], instruments: Instrument[]): Strip {
   const drawn = limits.filter(
-    (limit) =>
-      sameDimension(limit.unit, parameter.unit) && limit.forS === 0 && (limit.appliesWhen === "always" || limit.appliesWhen === "at power"),
+    (limit) => sameDimension(limit.unit, parameter.unit) && limit.forS === 0 && DRAWN_WHEN.has(limit.appliesWhen),
   );
   return {
     normal: parameter.normal,
     limits: [
       ...drawn.map(({ layer, side, value, unit }) => {
         const at = convert(value, unit, parameter.unit);
-        return { layer, side, value: at, label: figure(at) };
+        return { layer, side, value: at, label: layer === "placard" ? withUnit(figure(at), parameter.unit) : figure(at) };
       }),
       ...aborts.flatMap((line) => {
         const instrument = instruments.find(({ id }) => id === line.instrument);

@@ -34,7 +34,9 @@ export default async function SquawksPage({ params }: { params: Promise<{ progra
         lead={
           grounding.length > 0
             ? `${countOf(grounding.length, "grounding squawk")} open: no card is released and no sortie briefed until cleared.`
-            : `${countOf(open.length, "squawk")} open. None of them is grounding.`
+            : open.length > 0
+              ? `${countOf(open.length, "squawk")} open, none of them grounding.`
+              : "None is open."
         }
       />
       {squawks.length === 0 ? (
@@ -85,7 +87,7 @@ function SquawkTable({ squawks, programmeId }: { squawks: SquawkListItem[]; prog
             </Cell>
             <Cell className="whitespace-nowrap">
               {squawk.sortieId ? (
-                <Link href={`/programmes/${programmeId}/sorties/${squawk.sortieId}`} className="link inline-block py-1">
+                <Link href={`/programmes/${programmeId}/sorties/${squawk.sortieId}`} className="link py-1">
                   Sortie {squawk.sortieNumber}
                 </Link>
               ) : (

@@ -63,7 +63,7 @@ function Shelf({
             return (
               <Row key={code}>
                 <RowHead className="min-w-64">
-                  <Link href={`/programmes/${programmeId}/test-points/${code}`} className="link inline-block py-1 font-bold">
+                  <Link href={`/programmes/${programmeId}/test-points/${code}`} className="link py-1 font-bold">
                     {code} {name}
                   </Link>
                   <span className="block text-ink-soft text-sm">{content.purpose}</span>

@@ -7,8 +7,8 @@ import { abortWords } from "../../rules-section";
 
 /** What must not be passed in this point, and when to stop: the programme's table, the point's own limits, the aborts in force. */
 export function PointStops({ point, programme }: { point: CardPoint; programme: ProgrammeSnapshot }) {
-  const aborts = abortsOf(programme, point);
   const own = new Set(point.aborts.lines.map(({ id }) => id));
+  const aborts = abortsOf(programme, point).sort((a, b) => Number(own.has(b.id)) - Number(own.has(a.id)));
   return (
     <Section
       id="stops"

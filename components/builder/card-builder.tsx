@@ -1,7 +1,7 @@
 "use client";
 import { DndContext, DragOverlay, KeyboardSensor, MouseSensor, TouchSensor, useSensor, useSensors } from "@dnd-kit/core";
 import { Redo2, Undo2 } from "lucide-react";
-import { useCallback, useEffect, useMemo, useReducer, useRef, useState } from "react";
+import { type ReactNode, useCallback, useEffect, useMemo, useReducer, useRef, useState } from "react";
 import { v7 as newId } from "uuid";
 import { buttonClass } from "@/components/ui/button";
 import type { CardContent, CardIdentity, CardPoint, ProgrammeSnapshot } from "@/lib/testcards/card";
@@ -29,6 +29,7 @@ export type CardBuilderProps = {
   context: Omit<CardContext, "widths">;
   shelf: CardPoint[];
   answers: Record<string, string>;
+  beside: ReactNode; // state and revisions, beside the title
 };
 
 type Side = { show: "findings" } | { show: "cover" } | { show: "point"; point: string; section: string };
@@ -111,7 +112,13 @@ export function CardBuilder(props: CardBuilderProps) {
         if (template && drop) put(template, drop.to);
       }}
     >
-      <div className="flex items-center justify-between gap-3 border-rule border-b px-4 py-2">
+      <div className="flex flex-wrap items-center gap-x-4 gap-y-1 border-rule border-b px-4 py-2">
+        <div className="flex grow flex-wrap items-center gap-x-4 gap-y-1">
+          <h1 className="font-bold text-xl">
+            Card {identity.number} <span className="ms-2">{content.title}</span>
+          </h1>
+          {props.beside}
+        </div>
         <div className="flex gap-1">
           <button
             type="button"

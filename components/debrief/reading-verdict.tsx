@@ -1,12 +1,11 @@
 "use client";
 import { ArcStrip } from "@/components/gauge/arc-strip";
-import type { Strip } from "@/components/gauge/strip-layout";
+import { stripOf } from "@/components/gauge/reading-strip";
 import { VerdictMark } from "@/components/gauge/verdict-mark";
-import { formatMargin, formatNumber } from "@/lib/format/number";
-import { formatOnGauge, withUnit } from "@/lib/format/unit";
+import { formatMargin } from "@/lib/format/number";
+import { withUnit } from "@/lib/format/unit";
 import type { Instrument, Parameter } from "@/lib/testcards/card";
 import type { CheckLine } from "@/lib/testcards/debrief-types";
-import { convert } from "@/lib/testcards/units";
 import { worst } from "@/lib/testcards/verdict";
 
 /** The lines of one reading that can be shown as soon as there is a figure; "no reading" says nothing yet. */
@@ -44,53 +43,6 @@ export function ReadingVerdict({
       </p>
     </div>
   );
-}
-
-export function stripOf(
-  lines: CheckLine[],
-  main: CheckLine,
-  parameter: Parameter | undefined,
-  instrument: Instrument | undefined,
-): Strip | null {
-  const { limit, asTrue, onGauge, hotDay } = main;
-  if (!limit || !onGauge) return null;
-  const unit = limit.unit;
-  const same = lines.filter((line) => line.limit?.unit === unit);
-  const limits = ["placard", "card"] as const;
-  return {
-    normal: parameter?.normal && parameter.unit === unit ? { low: parameter.normal.low, high: parameter.normal.high } : null,
-    limits: limits.flatMap((layer) => {
-      const line = same.find(({ comparison, limit: one }) => comparison === `as flown, ${layer}` && one?.side === limit.side);
-      return line?.limit ? [{ layer, side: line.limit.side, value: line.limit.value, label: formatNumber(line.limit.value, 0) }] : [];
-    }),
-    marks: [
-      {
-        kind: "reading" as const,
-        value: convert(onGauge.value, onGauge.unit, unit),
-        label: instrument ? formatOnGauge(onGauge.value, instrument) : withUnit(formatNumber(onGauge.value, 1), onGauge.unit),
-      },
-      ...(asTrue
-        ? [
-            {
-              kind: "true" as const,
-              value: asTrue.value,
-              expandedUncertainty: asTrue.expandedUncertainty,
-              label: `${formatNumber(asTrue.value, 1)} true`,
-            },
-          ]
-        : []),
-      ...(hotDay
-        ? [
-            {
-              kind: "hot day" as const,
-              value: hotDay.value,
-              expandedUncertainty: hotDay.expandedUncertainty,
-              label: `${formatNumber(hotDay.value, 1)} hot day`,
-            },
-          ]
-        : []),
-    ],
-  };
 }
 
 function sentences(lines: CheckLine[]): string[] {

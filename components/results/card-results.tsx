@@ -1,5 +1,5 @@
-import { stripOf } from "@/components/debrief/reading-verdict";
 import { ArcStrip } from "@/components/gauge/arc-strip";
+import { stripOf } from "@/components/gauge/reading-strip";
 import { StripKey } from "@/components/gauge/scale";
 import { VerdictMark } from "@/components/gauge/verdict-mark";
 import { Badge } from "@/components/ui/badge";

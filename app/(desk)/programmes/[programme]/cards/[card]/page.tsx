@@ -1,4 +1,5 @@
 import Link from "next/link";
+import { cache } from "react";
 import { CardBuilder } from "@/components/builder/card-builder";
 import { CardRecord, type CardRecordView } from "@/components/card/card-record";
 import { CardState } from "@/components/card/card-state";
@@ -10,15 +11,15 @@ import { orNotFound } from "../../../../or-not-found";
 type Props = { params: Promise<{ programme: string; card: string }>; searchParams: Promise<{ rev?: string }> };
 
 export async function generateMetadata({ params, searchParams }: Props) {
-  const view = await viewOf(params, searchParams);
+  const view = await viewOf((await params).card, (await searchParams).rev);
   return { title: `Card ${view.card.number} ${view.document.content.title}` };
 }
 
-async function viewOf(params: Props["params"], searchParams: Props["searchParams"]) {
-  const [{ card }, { rev }] = [await params, await searchParams];
+/** Read once a request, for the title and the page. */
+const viewOf = cache(async (card: string, rev: string | undefined) => {
   const { db, actor, today } = await requestCtx();
   return orNotFound(() => getCardRevision(db, actor, card, { today, ...(rev ? { letter: rev } : {}) }));
-}
+});
 
 /** Only what the record shows goes to the browser. */
 function toRecord({ card, revision, document, digest, findings, comments, stamp, may }: CardView): CardRecordView {
@@ -39,32 +40,11 @@ function toRecord({ card, revision, document, digest, findings, comments, stamp,
 export default async function CardPage({ params, searchParams }: Props) {
   const { programme } = await params;
   const { db, actor } = await requestCtx();
-  const view = await viewOf(params, searchParams);
+  const view = await viewOf((await params).card, (await searchParams).rev);
   const { document, revision } = view;
   const { widths: _widths, ...context } = view.context;
   return (
     <main className="grow bg-paper">
-      <header className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-4">
-        <h1 className="font-bold text-xl">
-          Card {view.card.number} <span className="ms-2">{document.content.title}</span>
-        </h1>
-        <CardState state={revision.state} letter={revision.letter} />
-        {view.revisions.length > 1 ? (
-          <nav aria-label="Revisions" className="flex gap-1">
-            {view.revisions.toReversed().map(({ id, letter, state }) => (
-              <Link
-                key={id}
-                href={`?rev=${letter}`}
-                aria-current={id === revision.id ? "page" : undefined}
-                title={`Rev ${letter}, ${state}`}
-                className="flex size-11 items-center justify-center underline underline-offset-4 aria-[current]:font-bold aria-[current]:no-underline"
-              >
-                {letter}
-              </Link>
-            ))}
-          </nav>
-        ) : null}
-      </header>
       {view.may.edit ? (
         <CardBuilder
           key={revision.id}
@@ -75,10 +55,44 @@ export default async function CardPage({ params, searchParams }: Props) {
           context={context}
           shelf={listTestPoints(db, actor, programme).map(({ content }) => content)}
           answers={revision.answers}
+          beside={<Standing view={view} />}
         />
       ) : (
-        <CardRecord key={revision.id} view={toRecord(view)} />
+        <>
+          <header className="flex flex-wrap items-center gap-x-4 gap-y-2 px-4 py-2">
+            <h1 className="font-bold text-xl">
+              Card {view.card.number} <span className="ms-2">{document.content.title}</span>
+            </h1>
+            <Standing view={view} />
+          </header>
+          <CardRecord key={revision.id} view={toRecord(view)} />
+        </>
       )}
     </main>
+  );
+}
+
+/** State, and the other revisions. */
+function Standing({ view }: { view: CardView }) {
+  const { revision } = view;
+  return (
+    <>
+      <CardState state={revision.state} letter={revision.letter} />
+      {view.revisions.length > 1 ? (
+        <nav aria-label="Revisions" className="flex gap-1">
+          {view.revisions.toReversed().map(({ id, letter, state }) => (
+            <Link
+              key={id}
+              href={`?rev=${letter}`}
+              aria-current={id === revision.id ? "page" : undefined}
+              title={`Rev ${letter}, ${state}`}
+              className="flex size-11 items-center justify-center underline underline-offset-4 aria-[current]:font-bold aria-[current]:no-underline"
+            >
+              {letter}
+            </Link>
+          ))}
+        </nav>
+      ) : null}
+    </>
   );
 }

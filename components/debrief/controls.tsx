@@ -54,8 +54,15 @@ export function Problem({ id, children }: { id?: string; children: ReactNode }) 
   );
 }
 
-export function Panel({ children, className }: { children: ReactNode; className?: string }) {
-  return <div className={classNames("border border-rule bg-sheet p-4", className)}>{children}</div>;
+/** With a label it is a group of its own, so that "Lowest" or "Outside air then" is heard with the reading it belongs to. */
+export function Panel({ children, className, label }: { children: ReactNode; className?: string; label?: string }) {
+  const look = classNames("min-w-0 border border-rule bg-sheet p-4", className);
+  if (!label) return <div className={look}>{children}</div>;
+  return (
+    <fieldset aria-label={label} className={look}>
+      {children}
+    </fieldset>
+  );
 }
 
 export function Words({

@@ -28,7 +28,7 @@ export function ReadingField(props: ReadingProps) {
   const moment = own.filter(({ part }) => part === "at" || part === "altitude" || part === "oat");
   if (answer) return <Answer {...props} field={answer} />;
   return (
-    <Panel>
+    <Panel label={reading.label}>
       <div className="mb-2 flex flex-wrap items-start justify-between gap-2">
         <div>
           <h3 className="font-bold">{reading.label}</h3>

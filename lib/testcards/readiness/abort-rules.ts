@@ -72,7 +72,7 @@ function callAt(facts: CardFacts, dial: Dial): string {
   const proposal = line.perMinute
     ? proposeRateAbort(facts.card, at.point, line.parameter, line.side, line.instrument, line.windowS ?? 60)
     : proposeAbort(facts.card, at.point, line.parameter, line.side, line.instrument, line.appliesWhen);
-  if (!proposal?.inRange) return "Lower it, or correct the conversion.";
+  if (!proposal?.inRange) return `${line.side === "max" ? "Lower" : "Raise"} it, or correct the conversion.`;
   const number = withUnit(onGaugeFigure(proposal.onGauge, instrument.readable), instrument.unit);
   return `Call it at ${number} or ${line.side === "max" ? "lower" : "higher"}.`;
 }
@@ -103,7 +103,9 @@ function overLimit(facts: CardFacts, dial: Dial, limit: GuardedLimit): string | 
 function overRateLimit(facts: CardFacts, dial: Dial): string | null {
   const { line, instrument, parameter, at } = dial;
   const atReading = steepestReading(instrument);
-  if (!instrument.calibration || atReading === null || line.windowS === null) return null;
+  if (line.windowS === null || line.windowS <= 0)
+    return `${midSentence(parameter.shortName)} abort ${asShown(dial)} is a change without the time in which it is judged. State the seconds.`;
+  if (!instrument.calibration || atReading === null) return null;
   const windowMin = line.windowS / 60;
   const { slope } = correctReading(atReading, instrument.calibration);
   const perMin = (line.onGauge * slope) / windowMin;

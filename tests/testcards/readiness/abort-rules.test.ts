@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
+import { reviewCard } from "@/lib/testcards/readiness";
 import { must, oneFinding, plain } from "../support/one-finding";
-import { climb, numberAbort, shut, soak } from "../support/ready-card";
+import { climb, numberAbort, readyCard, readyContext, shut, soak } from "../support/ready-card";
 
 /* Coolant gauge 100 → 101.5, 120 → 122.5 °C: 107.5 reads 101.5 + 7.5 × 1.05 = 109.375 true (hand calculation). */
 describe("abort numbers against the card limit and the gauge", () => {
@@ -49,6 +50,16 @@ describe("abort numbers against the card limit and the gauge", () => {
       point.aborts.lines = [line];
     });
     expect(plain(found)).toContain("Call it at 40 °F or lower.");
+    const timeless = oneFinding("abort-past-limit", [climb()], ({ point }) => {
+      point.aborts.lines = [numberAbort("cht", "CHT-PANEL", 23.6, 45, { perMinute: true, windowS: null })];
+    });
+    expect(plain(timeless)).toBe("Point 1: CHT abort 45 °F is a change without the time in which it is judged. State the seconds.");
+  });
+
+  it("stands still for a rate called at 40 °F in 60 s", () => {
+    const line = numberAbort("cht", "CHT-PANEL", 23.6, 40, { id: "fall", perMinute: true, windowS: 60 });
+    const card = readyCard([climb({ aborts: { standing: true, lines: [line], ifReached: false } })]);
+    expect(reviewCard(card, readyContext())).toEqual([]);
   });
 
   it("finds a true value printed as a gauge number", () => {

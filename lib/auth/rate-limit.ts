@@ -46,3 +46,8 @@ export async function countTry(db: Db, counted: Counted, key: string): Promise<v
 export async function forgetTries(db: Db, counted: Counted, key: string): Promise<void> {
   await limiterOf(db, counted).delete(key.slice(0, 200));
 }
+
+/** A try that was no guess is given back: many people behind one address sign in rightly. */
+export async function giveBackTry(db: Db, counted: Counted, key: string): Promise<void> {
+  await limiterOf(db, counted).reward(key.slice(0, 200), 1);
+}

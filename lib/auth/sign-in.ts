@@ -2,7 +2,7 @@ import { and, asc, eq, isNull } from "drizzle-orm";
 import type { Db } from "@/db/open";
 import { memberships, users } from "@/db/schema";
 import { matchesPassword } from "./password";
-import { countTry, forgetTries } from "./rate-limit";
+import { countTry, forgetTries, giveBackTry } from "./rate-limit";
 import { openSession } from "./session";
 
 export type SignInTry = { email: string; password: string; address: string; userAgent: string; now: Date; newId: () => string };
@@ -26,6 +26,7 @@ export async function signIn(db: Db, { email, password, address, userAgent, now,
   const right = await matchesPassword(person?.passwordHash ?? null, password);
   if (!person || !right) return undefined;
   await forgetTries(db, "sign-in by e-mail", asked);
+  await giveBackTry(db, "sign-in by address", address);
   const sessionId = newId();
   openSession(db, { id: sessionId, userId: person.id, teamId: person.teamId, now, userAgent });
   return { sessionId, userId: person.id, name: person.name, email: person.email };

@@ -2,7 +2,13 @@ import { and, eq } from "drizzle-orm";
 import type { Tx } from "@/db/open";
 import { submissions } from "@/db/schema";
 import type { Ctx } from "./context";
+import { digestOf } from "./digest";
 import { Refusal } from "./errors";
+
+/** For a form: the key its page minted, and the digest of what was sent, so that a double click is one act. */
+export function toSubmission(key: string, body: unknown): NonNullable<Ctx["submission"]> {
+  return { key, bodyDigest: digestOf(body) };
+}
 
 /** The first answer to this Idempotency-Key; another body under the same key is refused. */
 export function findSubmission(tx: Tx, { actor, submission }: Ctx): { answer: string } | undefined {

@@ -94,6 +94,12 @@ describe("signing in", () => {
     expect(await attempt({ address: "203.0.113.10" })).toBeDefined();
   });
 
+  test("that succeeds does not count against its address", async () => {
+    const { desk, attempt } = deskWithPassword();
+    for (let i = 0; i < 59; i += 1) await countTry(desk.db, "sign-in by address", "203.0.113.9");
+    for (let i = 0; i < 3; i += 1) expect(await attempt({ address: "203.0.113.9" })).toBeDefined();
+  });
+
   test("forgets the wrong tries once the right password came", async () => {
     const { attempt } = deskWithPassword();
     for (let round = 0; round < 3; round += 1) {

@@ -33,7 +33,7 @@ export function LightSwitch({ initial }: { initial: Light }) {
             type="button"
             aria-pressed={light === each}
             onClick={() => choose(each)}
-            className="inline-flex min-h-11 items-center gap-2 rounded-sm px-3 aria-pressed:bg-ink aria-pressed:text-paper"
+            className="inline-flex min-h-11 items-center gap-2 whitespace-nowrap rounded-sm px-3 aria-pressed:bg-ink aria-pressed:text-paper"
           >
             <Icon aria-hidden="true" className="size-4" />
             {LIGHT_WORDS[each]}

@@ -3,7 +3,7 @@ export const LIGHTS = ["system", "day", "ramp"] as const;
 export type Light = (typeof LIGHTS)[number];
 
 export const LIGHT_COOKIE = "light";
-export const LIGHT_WORDS: Record<Light, string> = { system: "As the system", day: "Daylight", ramp: "Ramp light" };
+export const LIGHT_WORDS: Record<Light, string> = { system: "System", day: "Daylight", ramp: "Ramp light" };
 
 export function readLight(cookie: string | undefined): Light {
   return LIGHTS.find((light) => light === cookie) ?? "system";

@@ -81,22 +81,25 @@ function SortieTable({ sorties, address, more }: { sorties: SortieListItem[]; ad
         <TableHead>
           <HeadCell>Sortie</HeadCell>
           <HeadCell>Day</HeadCell>
-          <HeadCell>Cards</HeadCell>
-          <HeadCell>Pilot</HeadCell>
+          <HeadCell className="max-hand:hidden">Cards</HeadCell>
+          <HeadCell className="max-hand:hidden">Pilot</HeadCell>
           <HeadCell>State</HeadCell>
         </TableHead>
         <tbody>
           {sorties.map(({ id, number, kind, plannedOn, cards, pilot, state }) => (
             <Row key={id}>
               <RowHead>
-                <Link href={`${address}/sorties/${id}`} className="link py-1 font-bold">
+                <Link href={`${address}/sorties/${id}`} className="link whitespace-nowrap py-1 font-bold">
                   Sortie {number}
                 </Link>
-                <span className="text-ink-soft">, {kind}</span>
+                <span className="whitespace-nowrap text-ink-soft max-hand:block">
+                  <span className="max-hand:hidden">, </span>
+                  {kind}
+                </span>
               </RowHead>
               <Cell className="whitespace-nowrap">{formatDay(plannedOn)}</Cell>
-              <Cell>{cards ?? "none"}</Cell>
-              <Cell>{pilot ?? "not named"}</Cell>
+              <Cell className="max-hand:hidden">{cards ?? "none"}</Cell>
+              <Cell className="max-hand:hidden">{pilot ?? "not named"}</Cell>
               <Cell>
                 <Badge tone={TONE[state]}>{state}</Badge>
               </Cell>

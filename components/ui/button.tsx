@@ -9,7 +9,7 @@ const SHAPE =
   "disabled:cursor-not-allowed disabled:opacity-60 aria-disabled:cursor-not-allowed aria-disabled:opacity-60";
 
 const VARIANT: Record<ButtonVariant, string> = {
-  main: "border border-spine bg-spine text-spine-ink hover:not-disabled:bg-ink hover:not-disabled:text-sheet",
+  main: "border border-spine-edge bg-spine text-spine-ink hover:not-disabled:bg-ink hover:not-disabled:text-sheet",
   outline: "border border-ink bg-sheet text-ink hover:not-disabled:bg-wash-grey",
   quiet: "border border-transparent font-normal text-ink underline decoration-1 underline-offset-3 hover:not-disabled:bg-wash-grey",
   danger: "border border-ink-red bg-sheet text-ink-red hover:not-disabled:bg-wash-red",

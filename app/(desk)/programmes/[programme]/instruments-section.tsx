@@ -36,7 +36,7 @@ export function InstrumentsSection({
         <tbody>
           {instruments.map((instrument) => (
             <Row key={instrument.id}>
-              <RowHead className="min-w-64">
+              <RowHead className="min-w-52">
                 <span className="font-bold">{instrument.name}</span>{" "}
                 {parameters.find(({ code }) => code === instrument.parameter)?.name ?? instrument.parameter}
                 <span className="block text-ink-soft text-sm">
@@ -50,8 +50,8 @@ export function InstrumentsSection({
                 </span>
               </Cell>
               <Cell figures>{instrument.calibration ? uncertaintyWords(instrument.calibration) : "—"}</Cell>
-              <Cell className="min-w-60">{instrument.calibration ? <CalibrationTable calibration={instrument.calibration} /> : "—"}</Cell>
-              <Cell className="min-w-72">
+              <Cell className="min-w-52">{instrument.calibration ? <CalibrationTable calibration={instrument.calibration} /> : "—"}</Cell>
+              <Cell className="min-w-60">
                 <CalibrationState calibration={instrument.calibration} today={today} />
               </Cell>
             </Row>

@@ -36,15 +36,14 @@ export function ParameterLimits({
       <ArcStrip
         title={`${parameter.name}, true`}
         strip={stripOf(parameter, limits, aborts, instruments)}
-        length={560}
-        className="max-w-[36rem] pb-4"
+        className="max-w-[22rem] pb-2 desk:max-w-[27rem]"
       />
       <Table label={`Limits of ${parameter.name}`}>
         <TableHead>
           <HeadCell>Layer</HeadCell>
           <HeadCell figures>True</HeadCell>
           {instruments.map((instrument) => (
-            <HeadCell key={instrument.id} figures>
+            <HeadCell key={instrument.id} figures className="min-w-56">
               On the gauge
               <span className="block font-normal">
                 {instrument.name}

@@ -3,6 +3,7 @@ import { DndContext, DragOverlay, KeyboardSensor, MouseSensor, TouchSensor, useS
 import { Redo2, Undo2 } from "lucide-react";
 import { type ReactNode, useCallback, useEffect, useMemo, useReducer, useRef, useState } from "react";
 import { v7 as newId } from "uuid";
+import { Discussion, type Remark } from "@/components/card/discussion";
 import { buttonClass } from "@/components/ui/button";
 import type { CardContent, CardIdentity, CardPoint, ProgrammeSnapshot } from "@/lib/testcards/card";
 import type { CardContext, Finding } from "@/lib/testcards/readiness-types";
@@ -29,6 +30,7 @@ export type CardBuilderProps = {
   context: Omit<CardContext, "widths">;
   shelf: CardPoint[];
   answers: Record<string, string>;
+  comments: Remark[];
   beside: ReactNode; // state and revisions, beside the title
 };
 
@@ -242,6 +244,11 @@ export function CardBuilder(props: CardBuilderProps) {
                 findings={findings}
                 answers={answers}
               />
+              {props.comments.length > 0 ? (
+                <div className="mt-6">
+                  <Discussion cardId={identity.id} comments={props.comments} points={content.points} selected={null} may={false} />
+                </div>
+              ) : null}
             </>
           )}
         </aside>

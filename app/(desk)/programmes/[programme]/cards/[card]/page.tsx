@@ -55,6 +55,7 @@ export default async function CardPage({ params, searchParams }: Props) {
           context={context}
           shelf={listTestPoints(db, actor, programme).map(({ content }) => content)}
           answers={revision.answers}
+          comments={view.comments}
           beside={<Standing view={view} />}
         />
       ) : (

@@ -17,6 +17,7 @@ import { PointEditor } from "./point-editor/point-editor";
 import { SaveProblem, SaveStatus } from "./save-status";
 import { SendForReview } from "./send-for-review";
 import { SheetWorkspace } from "./sheet-workspace";
+import { asOnShelf } from "./shelf-difference";
 import { ShelfPanel } from "./shelf-panel";
 import { useAutosave } from "./use-autosave";
 import { useCardPaper } from "./use-card-paper";
@@ -220,7 +221,7 @@ export function CardBuilder(props: CardBuilderProps) {
                   dispatch({
                     type: "change point",
                     point: point.id,
-                    patch: { [part]: copyPoint(original, newId)[part] },
+                    patch: asOnShelf(point, original, part, newId),
                     what: `${part} as on the shelf`,
                   });
               }}

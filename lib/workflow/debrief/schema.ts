@@ -43,16 +43,16 @@ const pointDebrief: z.ZodType<PointDebrief> = z.strictObject({
 const call: z.ZodType<AbortCall> = z.strictObject({
   point: id,
   word: z.enum(CALL_WORDS, "Choose the word that was called."),
-  trigger: line(120),
+  trigger: said,
   onGauge: figure.nullable(),
   durationS: seconds,
-  action: line(300),
+  action: said,
   recovered: z.boolean().nullable(),
 });
 
 export const DebriefInput: z.ZodType<Debrief> = z.strictObject({
   kind: z.enum(SORTIE_KINDS),
-  revisionsFlown: z.array(z.strictObject({ card: id, letter: line(10), note: line(300) })).max(20),
+  revisionsFlown: z.array(z.strictObject({ card: id, letter: line(10), note: said })).max(20),
   times: z.strictObject({
     offBlocks: clock,
     takeOff: clock,
@@ -79,7 +79,7 @@ export const DebriefInput: z.ZodType<Debrief> = z.strictObject({
     note: said,
   }),
   points: z.array(pointDebrief).max(80),
-  squawks: z.array(z.strictObject({ id, system: line(60), text: line(COMMENT_LENGTH), flyAgain: z.boolean().nullable() })).max(20),
+  squawks: z.array(z.strictObject({ id, system: line(60), text: said, flyAgain: z.boolean().nullable() })).max(20),
   comment: said,
 });
 

@@ -30,6 +30,8 @@ export function parseClock(typed: string): string | null {
 /** What a typed text means for its field, or why it means nothing. */
 export function readTyped(field: DebriefField, typed: string): { value: FieldValue; problem: string | null } {
   if (typed.trim() === "") return { value: null, problem: null };
+  if (field.kind === "choice" || field.kind === "yes-no" || field.kind === "text" || field.kind === "photo")
+    return { value: typed, problem: null };
   if (field.kind === "time of day") {
     const value = parseClock(typed);
     return { value, problem: value === null ? "Write the time as hh:mm, UTC." : null };

@@ -1,6 +1,6 @@
 "use client";
 import type { CardDocument, CardPoint, Reading } from "@/lib/testcards/card";
-import type { CheckLine } from "@/lib/testcards/debrief-types";
+import type { CheckLine, FieldPart } from "@/lib/testcards/debrief-types";
 import { OUTCOMES } from "@/lib/testcards/words";
 import { Choices, Panel, Problem, Words, YES_NO } from "./controls";
 import type { ScreenProps } from "./debrief-form";
@@ -118,8 +118,10 @@ export function PointScreen(props: PointProps & { lines: CheckLine[]; place: str
   );
 }
 
+const MOMENT_PARTS: FieldPart[] = ["at", "altitude", "oat"];
+
 /** The first reading of the point that has a moment of its own: later ones may share it by one tick. */
 function sharedMoment({ point, fields }: PointProps, reading: Reading): Reading | null {
-  const first = point.readings.find(({ id }) => fields.some((field) => field.reading === id && field.part === "at"));
+  const first = point.readings.find(({ id }) => fields.some((field) => field.reading === id && MOMENT_PARTS.includes(field.part)));
   return first && first.id !== reading.id ? first : null;
 }

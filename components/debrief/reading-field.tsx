@@ -75,7 +75,7 @@ export function ReadingField(props: ReadingProps) {
         );
       })}
       {rows ? <Rows {...props} field={rows} entry={entry} put={put} /> : null}
-      {figures.some((field) => typeof fieldValue(draft.debrief, field) === "number") && moment.length > 0 ? (
+      {moment.length > 0 && (entry.rows.length > 0 || figures.some((field) => typeof fieldValue(draft.debrief, field) === "number")) ? (
         <Moment {...props} fields={moment} entry={entry} put={put} shares={shares} />
       ) : null}
       <ReadingVerdict lines={lines} parameter={parameter} instrument={instrument} />
@@ -93,7 +93,7 @@ function expectedWords(field: DebriefField | undefined): string {
 
 type EntryProps = ReadingProps & { entry: ReadingEntry; put: (patch: Partial<ReadingEntry>) => void };
 
-/** When and where the highest stood: the hot-day rule needs the air of that moment. */
+/** When and where the highest stood: the hot-day rule needs the air of that moment. Rows have their own times. */
 function Moment({ fields, entry, put, shares, draft, errors, type }: EntryProps & { fields: DebriefField[] }) {
   const id = useId();
   return (
@@ -115,7 +115,7 @@ function Moment({ fields, entry, put, shares, draft, errors, type }: EntryProps 
           {fields.map((field) => (
             <FigureField
               key={field.key}
-              field={{ ...field, label: MOMENTS[field.part] ?? field.label }}
+              field={{ ...field, label: momentLabel(field, fields) }}
               typed={draft.typed[field.key] ?? ""}
               error={errors.get(field.key)}
               onType={(text) => type(field, text)}
@@ -132,6 +132,12 @@ const MOMENTS: Record<string, string> = {
   altitude: "Pressure altitude then",
   oat: "Outside air then",
 };
+
+/** "Then" wants a moment named before it; of rows it is where they are highest. */
+function momentLabel({ part, label }: DebriefField, asked: DebriefField[]): string {
+  const name = MOMENTS[part] ?? label;
+  return asked.some((field) => field.part === "at") ? name : name.replace(/ then$/, " at the highest");
+}
 
 /** Rows as on the paper. What was not written is left empty; "same" repeats the row above. */
 function Rows({ field, entry, put, draft, keepTyped, errors }: EntryProps & { field: DebriefField }) {

@@ -5,6 +5,7 @@ import { VerdictMark } from "@/components/gauge/verdict-mark";
 import { Badge } from "@/components/ui/badge";
 import { formatNumber, ownDecimals } from "@/lib/format/number";
 import { withUnit } from "@/lib/format/unit";
+import { asSentences } from "@/lib/format/words";
 import { type CardDocument, instrumentOf, parameterOf } from "@/lib/testcards/card";
 import type { CheckReport, DisciplineLine, PointReport } from "@/lib/testcards/debrief-types";
 import { type ResultRow, resultRows } from "./result-rows";
@@ -71,7 +72,7 @@ function PointResults({
         </>
       )}
       <p className="mt-4">
-        <span className="font-bold">Computed for the next step: {point.decision}.</span> {point.because.join(" ")}
+        <span className="font-bold">Computed for the next step: {point.decision}.</span> {asSentences(point.because)}
       </p>
     </section>
   );

@@ -15,10 +15,10 @@ export function ResultsTable({ label, rows }: { label: string; rows: ResultRow[]
             <HeadCell>Reading</HeadCell>
             <HeadCell figures>On the gauge</HeadCell>
             <HeadCell figures>True ±U</HeadCell>
-            <HeadCell>As flown, card</HeadCell>
-            <HeadCell>As flown, placard</HeadCell>
+            <HeadCell>As flown, to card</HeadCell>
+            <HeadCell>As flown, to placard</HeadCell>
             <HeadCell figures>Hot day ±U</HeadCell>
-            <HeadCell>Hot day, placard</HeadCell>
+            <HeadCell>Hot day, to placard</HeadCell>
           </TableHead>
           <tbody>
             {rows.map((row) => (
@@ -99,11 +99,9 @@ export function Judged({ line }: { line: CheckLine | null }) {
     <span className="inline-flex flex-col items-end gap-0.5 hand:items-start">
       <VerdictMark verdict={verdict} reason={verdict === "no verdict" ? (reasons[0] ?? null) : null} />
       {margin !== null && limit ? (
-        <span className="text-sm tabular-nums">
+        <span className="whitespace-nowrap text-sm tabular-nums">
           {informationOnly ? "information only: " : ""}
-          {margin < 0
-            ? `${withUnit(formatMargin(-margin), limit.unit)} past ${formatNumber(limit.value, ownDecimals(limit.value))}`
-            : `${withUnit(formatMargin(margin), limit.unit)} in hand to ${formatNumber(limit.value, ownDecimals(limit.value))}`}
+          {margin < 0 ? `${withUnit(formatMargin(-margin), limit.unit)} past` : `${withUnit(formatMargin(margin), limit.unit)} in hand`}
         </span>
       ) : null}
       {rest.length + further.length > 0 ? <span className="text-ink-soft text-sm">{[...rest, ...further].join(", ")}</span> : null}
@@ -135,10 +133,13 @@ function onGauge({ onGauge: value }: CheckLine) {
   return value ? withUnit(formatNumber(value.value, ownDecimals(value.value, 2)), value.unit) : NONE;
 }
 
+/** One decimal as the trade writes temperatures and pressures; none where the figure runs into thousands. */
+const shown = (value: number) => (Math.abs(value) >= 1000 ? 0 : 1);
+
 function asTrue({ asTrue: value }: CheckLine) {
   return value ? (
     <>
-      {withUnit(formatNumber(value.value, 1), value.unit)}
+      {withUnit(formatNumber(value.value, shown(value.value)), value.unit)}
       <span className="block text-ink-soft text-sm">{formatUncertainty(value.expandedUncertainty)}</span>
     </>
   ) : (
@@ -151,7 +152,7 @@ function hotDay(line: CheckLine | null) {
   const { value, unit, expandedUncertainty, difference, clamped, basis } = line.hotDay;
   return (
     <>
-      {withUnit(formatNumber(value, 1), unit)}
+      {withUnit(formatNumber(value, shown(value)), unit)}
       <span className="block text-ink-soft text-sm">
         {formatUncertainty(expandedUncertainty)}
         <br />

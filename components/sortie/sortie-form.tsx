@@ -176,7 +176,7 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots }
         </Button>
       </fieldset>
 
-      <div className="grid gap-4 hand:grid-cols-3">
+      <div className="grid items-end gap-4 hand:grid-cols-3">
         <Field name="settings.fuelOnBoardL" label="Fuel on board, L" error={errors.settings?.fuelOnBoardL?.message}>
           {(props) => <Input inputMode="decimal" {...props} {...register("settings.fuelOnBoardL", { setValueAs: asNumber })} />}
         </Field>

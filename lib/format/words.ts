@@ -13,3 +13,8 @@ const or = new Intl.ListFormat("en", { type: "disjunction" });
 
 export const listAnd = (items: readonly string[]) => and.format(items);
 export const listOr = (items: readonly string[]) => or.format(items);
+
+/** Reasons in a row as sentences: each begins with a capital and ends with a stop. */
+export function asSentences(parts: readonly string[]): string {
+  return parts.map((part) => `${sentenceCase(part)}${/[.!?]$/.test(part) ? "" : "."}`).join(" ");
+}

@@ -1,5 +1,5 @@
 import { describe, expect, test } from "vitest";
-import { parseClock, parseFigure, parseStopwatch } from "@/components/debrief/field-value";
+import { parseClock, parseFigure, parseStopwatch, readTyped } from "@/components/debrief/field-value";
 
 describe("what is typed on the phone", () => {
   test.each([
@@ -32,5 +32,35 @@ describe("what is typed on the phone", () => {
     ["12", null],
   ])("reads the time %j as %s", (typed, value) => {
     expect(parseClock(typed)).toBe(value);
+  });
+});
+
+describe("what a typed text means for its field", () => {
+  const field = {
+    key: "p.outcome",
+    section: "point",
+    point: "p",
+    reading: null,
+    part: "outcome",
+    label: "Outcome",
+    kind: "choice",
+    unit: null,
+    low: null,
+    high: null,
+    step: null,
+    expected: null,
+    choices: ["flown", "skipped"],
+    rows: [],
+    required: true,
+    recordedBy: "pilot",
+  } as const;
+
+  test("keeps a choice, a yes or no and words as they are", () => {
+    for (const kind of ["choice", "yes-no", "text", "photo"] as const)
+      expect(readTyped({ ...field, kind, choices: [], rows: [] }, "flown")).toEqual({ value: "flown", problem: null });
+  });
+
+  test("says what to write where a figure is none", () => {
+    expect(readTyped({ ...field, kind: "number", choices: [], rows: [] }, "about 90")).toEqual({ value: null, problem: "Write a number." });
   });
 });

@@ -9,6 +9,7 @@ import { Facts, PageHeader, Section } from "@/components/ui/page-header";
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatNumber } from "@/lib/format/number";
 import { formatDay, formatInstant } from "@/lib/format/time";
+import { countOf } from "@/lib/format/words";
 import { shortDigest } from "@/lib/workflow/card/policy";
 import { whoMay } from "@/lib/workflow/permissions";
 import { getProgramme } from "@/lib/workflow/programme/queries";
@@ -93,7 +94,7 @@ function CardOfSortie({ card, index, sortieId, here, mayAnswer, open }: CardProp
           <CardState state={card.state} letter={card.letter} />
         </p>
         <p className="text-ink-soft text-sm">
-          {card.document.content.points.length} points, digest <span className="font-mono">{shortDigest(card.digest)}</span>
+          {countOf(card.document.content.points.length, "point")}, digest <span className="font-mono">{shortDigest(card.digest)}</span>
         </p>
         <p className="mt-1">
           {card.answer === null

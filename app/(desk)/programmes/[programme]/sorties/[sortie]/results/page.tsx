@@ -7,6 +7,7 @@ import { Badge } from "@/components/ui/badge";
 import { PageHeader, Section } from "@/components/ui/page-header";
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatInstant } from "@/lib/format/time";
+import { asSentences } from "@/lib/format/words";
 import { SHEET_CAUTION } from "@/lib/testcards/words";
 import { getSortieResults, type SortieResults } from "@/lib/workflow/sortie/queries";
 import { orNotFound } from "../../../../../or-not-found";
@@ -118,7 +119,7 @@ function Follows({ results: { checks, squawks }, programme }: { results: SortieR
             <span className="font-bold">
               Card {card.number}: {report.decision}.
             </span>{" "}
-            {report.because.join(" ")}
+            {asSentences(report.because)}
             {report.decision === "hold" ? "" : " Proposed; it stands when a reviewer countersigns."}
           </li>
         ))}

@@ -224,12 +224,16 @@ function derived(subject: Subject, limit: AppliedLimit, value: number, u: number
   return { onGauge: null, corrected, reasons: [], why };
 }
 
-/** A limit that may be passed for a while: the longest stretch beyond it counts, and a single reading cannot show one. */
+/**
+ * A limit that may be passed for a while: the longest stretch beyond it counts, and a single reading cannot show one.
+ * Of a "sustained" limit the reading itself is the value that was held that long.
+ */
 function allowTime(subject: Subject, limit: AppliedLimit, judgement: Judgement, u: number): { judgement: Judgement; why: string } {
   if (judgement.verdict !== "exceeded" && judgement.verdict !== "marginal") return { judgement, why: "" };
   const series = subject.entry && subject.reading.sampling === "series" ? trueSeries(subject.entry, subject.gauge, limit.unit) : null;
   if (!series) {
     if (judgement.verdict === "marginal") return { judgement, why: "" };
+    if (limit.statistic === "sustained") return { judgement, why: `held ${clock(limit.forS)} or more` };
     return {
       judgement: noVerdict(["no reading"]),
       why: `past it; the reading alone cannot show for how long, ${clock(limit.forS)} allowed`,

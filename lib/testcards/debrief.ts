@@ -188,13 +188,14 @@ function readingFields(card: CardDocument, point: CardPoint, reading: Reading): 
     expected: expectedOnGauge(reading, instrument),
   };
   const { sampling } = reading;
-  if (sampling === "series") return [of("rows", "rows", { ...number, kind: "series", rows: plannedRows(point) })];
+  const moment = momentFields(card, point, reading, of);
+  if (sampling === "series") return [of("rows", "rows", { ...number, kind: "series", rows: plannedRows(point) }), ...moment];
   const value = of("value", sampling === "single" ? "value" : sampling === "lowest" ? "lowest" : "highest", number);
   const lowest = sampling === "lowest and highest" ? [of("lowest", "lowest", { ...number, label: `${reading.label}, lowest` })] : [];
-  return [...lowest, value, ...momentFields(card, point, reading, of)];
+  return [...lowest, value, ...moment];
 }
 
-/** When, how high and in what air a maximum was read: what the hot-day rule and "5 min past peak" need. */
+/** When, how high and in what air a maximum was read: what the hot-day rule and "5 min past peak" need. Rows tell when by themselves. */
 function momentFields(
   card: CardDocument,
   point: CardPoint,
@@ -203,7 +204,8 @@ function momentFields(
 ): DebriefField[] {
   const parameter = parameterOf(card, reading.parameter);
   if (!parameter || parameter.hotDayRule === "none" || reading.sampling === "lowest") return [];
-  const highest = reading.sampling !== "single";
+  const highest = reading.sampling === "highest" || reading.sampling === "lowest and highest";
+  const timed = reading.sampling === "series" && plannedRows(point).every((row) => row.atS !== null);
   const gauge = outsideAirGauge(card, point);
   const moment = (what: string) => `${reading.label}: ${what}`;
   const at = of("atS", "at", { label: moment("when"), kind: "duration", unit: "s", low: 0, high: LONGEST_S });
@@ -216,7 +218,7 @@ function momentFields(
     step: gauge?.readable ?? 1,
   });
   return [
-    ...(highest || point.completion.rule === "5 min past peak" ? [at] : []),
+    ...(highest || (!timed && point.completion.rule === "5 min past peak") ? [at] : []),
     ...(point.place === "air" ? [altitude] : []),
     ...(highest || point.place === "air" ? [oat] : []),
   ];

@@ -8,7 +8,7 @@ import { calibratedInstruments, demoSnapshot } from "@/db/seed/snapshot";
 import { TEST_POINTS } from "@/db/seed/test-points/shelf";
 import { B612_WIDTHS } from "@/lib/testcards/b612-widths";
 import { gaugeLimit } from "@/lib/testcards/calibration";
-import { assembleCard, type CardContent, type CardDocument, type CardPoint } from "@/lib/testcards/card";
+import type { CardPoint } from "@/lib/testcards/card";
 import { planCard } from "@/lib/testcards/card-plan";
 import { proposeAbort, proposeRateAbort } from "@/lib/testcards/propose-abort";
 import { reviewCard } from "@/lib/testcards/readiness";
@@ -16,6 +16,7 @@ import type { CardContext } from "@/lib/testcards/readiness-types";
 import { riskLevel } from "@/lib/testcards/risk";
 import { convert, type Unit } from "@/lib/testcards/units";
 import { cardPoint } from "@/lib/workflow/card/point-schema";
+import { cardOfOne } from "../support/card-of-one";
 
 const DAY = "2031-05-09";
 const programme = demoSnapshot(DAY);
@@ -27,29 +28,7 @@ const instrumentNamed = (name: string) => {
   return { ...found, calibration: found.calibration };
 };
 
-function kindFor(point: CardPoint): CardContent["kind"] {
-  if (point.engine === "stopped") return "inspection";
-  if (point.place === "air") return "flight";
-  return ["T05", "T07"].includes(codeOf(point)) ? "taxi" : "ground run";
-}
-
-const alone = (point: CardPoint): CardDocument =>
-  assembleCard(
-    programme,
-    { id: "card", number: "01", letter: "A", author: { id: "author", name: "A. Engineer" } },
-    {
-      title: point.title,
-      kind: kindFor(point),
-      crew: [{ role: "pilot", massKg: 92 }],
-      baggageKg: 6,
-      fuelOnBoardL: 64,
-      bingoL: 26,
-      plannedOn: DAY,
-      firstFlightOfChange: point.firstFlight,
-      remarks: "",
-      points: [point],
-    },
-  );
+const alone = (point: CardPoint) => cardOfOne(programme, point, DAY);
 
 describe("the numbers on the gauge", () => {
   // Programme table of limits: true -> gauge -> printed to a readable mark on the cautious side (hand interpolation in the tables).

@@ -75,6 +75,8 @@ describe("debriefModel", () => {
       "p1.oil-p.lowest",
       "p1.oil-p.value",
       "p1.cht.rows",
+      "p1.cht.altitudeFt",
+      "p1.cht.oat",
       "p1.tries.value",
       "p1.leak.answer",
       "p1.rough.answer",
@@ -117,6 +119,15 @@ describe("debriefModel", () => {
     expect(fieldOf("p1.oil-p.lowest").part).toBe("lowest");
     expect(fieldOf("p1.oil-p.value").part).toBe("highest");
     expect(fieldOf("p1.tries.value")).toMatchObject({ kind: "count", low: 0, high: 3, step: 1 });
+  });
+
+  test("asks when rows were highest only where their labels are no times", () => {
+    const keysBy = (by: "time" | "free") =>
+      debriefModel(sampleCard([{ ...climb, grid: { head: "at", unit: null, by, rows: ["1", "2"], timeColumn: false } }])).map(
+        ({ key }) => key,
+      );
+    expect(keysBy("time")).not.toContain("p1.cht.atS");
+    expect(keysBy("free")).toContain("p1.cht.atS");
   });
 
   test("offers a position for the ground only on the ground", () => {

@@ -54,7 +54,7 @@ const T06 = testPoint("T06", {
     coolDown("1000 rpm 3 min, cool-down"),
   ],
   readings: [
-    read("rpm", { id: "rpm-full", label: "RPM at full power, highest", sheet: "single", when: ["full power"] }),
+    read("rpm", { id: "rpm-full", label: "RPM at full power", sampling: "lowest and highest", sheet: "single", when: ["full power"] }),
     read("map", { id: "map-full", label: "MAP at full power, highest", sheet: "single", when: ["full power"] }),
     read("oilT", {
       id: "oil-t-before",
@@ -149,7 +149,7 @@ const T23 = testPoint("T23", {
     ownLimit("vibration", "max", 20, "mm/s", 1, "Mount"),
     ownLimit("vibration-firewall", "max", 20, "mm/s", 1, "Firewall"),
     ownLimit("vibration-hinge", "max", 20, "mm/s", 1, "COWL hinge"),
-    ownLimit("vibration-held", "max", 12, "mm/s", 1, "Held 30 s", { forS: 30 }),
+    ownLimit("vibration-held", "max", 12, "mm/s", 1, "Held 30 s", { forS: 30, statistic: "sustained" }),
   ],
   aborts: [abortAt("vibration", "VIBRATION", 18, 18, { setBy: "gauge" }), ...abortIf("rising at fixed rpm")],
   recovery: "COWL OPEN, leave that rpm, 1000 rpm 3 min, stop",

@@ -14,7 +14,12 @@ export type Painter = {
   rotate(degrees: number, options: { origin: [number, number] }): Painter;
   font(file: string): Painter;
   fontSize(pt: number): Painter;
-  text(text: string, x: number, y: number, options: { lineBreak: boolean; baseline: string; fill: boolean; stroke: boolean }): Painter;
+  text(
+    text: string,
+    x: number,
+    y: number,
+    options: { lineBreak: boolean; baseline: string; fill: boolean; stroke: boolean; features: { kern: boolean } },
+  ): Painter;
   fillColor(colour: string): Painter;
   strokeColor(colour: string): Painter;
   lineWidth(pt: number): Painter;
@@ -47,7 +52,8 @@ function paintText(painter: Painter, fonts: FontFiles, item: TextItem): void {
     .strokeColor(INK)
     .lineWidth(OUTLINE_PT);
   painter.font(fonts[item.weight]).fontSize(item.sizePt);
-  const options = { lineBreak: false, baseline: "alphabetic", fill: !outlined, stroke: outlined };
+  // The core measured without kerning.
+  const options = { lineBreak: false, baseline: "alphabetic", fill: !outlined, stroke: outlined, features: { kern: false } };
   painter.text(item.text, origin[0] - pt(widthMm * share), origin[1], options).restore();
 }
 

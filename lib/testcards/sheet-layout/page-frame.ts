@@ -95,10 +95,10 @@ export function inkFooter(
   const widthMm = frame.widthMm - CODE_MM - CODE_GAP_MM;
   const lettering = { sizePt: STAMP_PT, role: "footer" as const };
   const record = [releaseRuns(stamp), recordRuns(card, stamp, place)].flatMap((runs) => setLines(runs, widthMm, STAMP_PT, widths));
-  const topMm = frame.bottomMm - record.length * STAMP_PITCH_MM;
-  inkLines(ink, record, frame.leftMm, topMm, STAMP_PITCH_MM, lettering);
   const noteLines = setLines([bold(note)], widthMm, STAMP_PT, widths);
   inkLines(ink, noteLines, frame.leftMm, frame.bottomMm - heightMm, STAMP_PITCH_MM, lettering);
+  const topMm = frame.bottomMm - record.length * STAMP_PITCH_MM;
+  inkLines(ink, record, frame.leftMm, topMm, STAMP_PITCH_MM, lettering);
   ink.push({ kind: "code", xMm: frame.rightMm - CODE_MM, yMm: frame.bottomMm - CODE_MM, sizeMm: CODE_MM, role: "footer" });
 }
 

@@ -166,7 +166,11 @@ export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[]
       let count = takes(titleMm(part), members, page.roomMm - usedMm(page));
       if (count === 0) {
         count = crammed(titleMm(part), members, page.roomMm);
-        trouble.push({ point: point.id, page: pageNumber(), message: crampedMessage(whole, members.slice(0, count), titleMm(part), page) });
+        const wholeLead = members.slice(count).every((m) => m.kind !== "lead");
+        const high = stackedMm(titleMm(part), members.slice(0, count));
+        if (!wholeLead || high > page.roomMm + 1e-6) {
+          trouble.push({ point: point.id, page: pageNumber(), message: crampedMessage(whole, high - page.roomMm, page) });
+        }
       }
       page.parts.push(drawPart(sheet, whole, part, members.slice(0, count), members.slice(count)));
       members = members.slice(count);
@@ -183,10 +187,11 @@ function crammed(titleMm: number, members: readonly Member[], roomMm: number): n
   return count;
 }
 
-function crampedMessage(whole: Whole, members: readonly Member[], titleMm: number, page: PagePlan): string {
-  const overMm = stackedMm(titleMm, members) - page.roomMm;
-  const what = `Point ${whole.numberOnCard}, ${whole.point.title}`;
-  if (overMm > 0)
-    return `${what}: the page has ${Math.round(Math.max(0, page.roomMm))} mm for points, ${Math.ceil(overMm)} mm too little. Shorten its text or the limits and aborts.`;
-  return `${what}: entry, steps and recovery leave no room for its first cells on one page. Shorten them or split the point.`;
+function crampedMessage({ numberOnCard, point }: Whole, overMm: number, page: PagePlan): string {
+  const what = `Point ${numberOnCard}, ${point.title}`;
+  if (overMm > 0) {
+    const room = Math.round(Math.max(0, page.roomMm));
+    return `${what}: the page has ${room} mm for points, ${Math.ceil(overMm)} mm too little. Shorten its text or the limits and aborts.`;
+  }
+  return `${what}: entry, steps and recovery do not fit on one page. Shorten them or split the point.`;
 }

@@ -11,6 +11,7 @@ import {
   type Ink,
   inkBox,
   inkLine,
+  inkLines,
   inkRule,
   inkText,
   type Run,
@@ -137,7 +138,7 @@ export function gridBlocks(card: CardDocument, point: CardPoint, across: Across)
   return Array.from({ length: grids }, (_, i) => gridOf(point, columns.slice(i * each, (i + 1) * each), across));
 }
 
-type Single = { reading: Reading; runs: Run[][]; row: number; inside: string[] };
+type Single = { reading: Reading; label: Run[]; row: number; inside: string };
 
 /** Readings written once. A grid reading on a point without rows is written once too. */
 function singlesOf(card: CardDocument, point: CardPoint): Single[] {
@@ -146,54 +147,77 @@ function singlesOf(card: CardDocument, point: CardPoint): Single[] {
     .filter((r) => r.onSheet === "single" || (rowless && r.onSheet === "grid"))
     .flatMap((reading): Single[] => {
       const symbol = reading.unit === null ? "" : unitSymbol(reading.unit);
-      const sub = [regular([symbol, expectedText(card, reading)].filter((t) => t !== "").join("  "))];
-      const inside = reading.kind === "yes-no" ? ["YES", "NO"] : reading.kind === "choice" ? reading.choices : [];
-      if (reading.sampling !== "lowest and highest") return [{ reading, runs: [[bold(reading.label)], sub], row: 0, inside }];
-      return ["lowest", "highest"].map((which, row) => ({ reading, runs: [[bold(`${reading.label}, ${which}`)], sub], row, inside }));
+      const sub = [symbol, expectedText(card, reading)].filter((t) => t !== "").join(" ");
+      const inside = (reading.kind === "yes-no" ? ["YES", "NO"] : reading.kind === "choice" ? reading.choices : []).join("    ");
+      const named = (label: string) => [bold(label), regular(sub === "" ? "" : `  ${sub}`)];
+      if (reading.sampling !== "lowest and highest") return [{ reading, label: named(reading.label), row: 0, inside }];
+      const name = reading.label.replace(/, (lowest and )?highest$/, "");
+      return ["lowest", "highest"].map((which, row) => ({ reading, label: named(`${name}, ${which}`), row, inside }));
     });
 }
 
-/** As many across as keep every label in two lines and uncut, and every choice inside its cell. */
-function cellsAcross(singles: readonly Single[], { paper, widthMm, widths }: Across): number {
-  const fits = (across: number) =>
-    singles.every(({ runs, inside }) => {
-      const label = runs[0]?.[0]?.text ?? "";
-      const room = widthMm / across - 2 * CELL_PAD_MM;
-      const insideMm = textWidthMm(inside.join("    "), "regular", LABEL_PT, widths);
-      return linesIn([[bold(label)]], widthMm / across, widths).length <= 2 && widestWordMm(label, widths) <= room && insideMm <= room;
-    });
-  const most = Math.min(MOST_CELLS, singles.length, Math.floor(widthMm / PAPERS[paper].cellWidthMm));
-  for (let across = most; across > 1; across -= 1) if (fits(across)) return Math.ceil(singles.length / Math.ceil(singles.length / across));
-  return 1;
+const SINGLE_LINES = 2;
+
+/** How wide the cell of a single reading is when so many stand in a row; null where label or choices do not fit then. */
+function singleCellMm({ label, inside, reading }: Single, across: number, { paper, widthMm, widths }: Across): number | null {
+  const eachMm = widthMm / across;
+  const insideMm = inside === "" ? 0 : textWidthMm(inside, "regular", LABEL_PT, widths) + 4 * CELL_PAD_MM;
+  const roomy = reading.kind === "text" ? eachMm * 0.72 : across === 1 ? eachMm * 0.3 : 0;
+  const cellMm = Math.max(PAPERS[paper].cellWidthMm + 1, insideMm, roomy);
+  const labelMm = eachMm - cellMm - 2 * CELL_PAD_MM;
+  const words = label.map((run) => widestWordMm(run.text, widths));
+  const fits = labelMm > 0 && Math.max(...words) <= labelMm - 2 * CELL_PAD_MM && linesIn([label], labelMm, widths).length <= SINGLE_LINES;
+  return fits ? cellMm : null;
 }
 
-function singleRow(singles: readonly Single[], { paper, widthMm, widths }: Across): Block {
-  const cellMm = widthMm / singles.length;
-  const head = headRow(
-    singles.map(({ runs }, i) => ({ xMm: i * cellMm, widthMm: cellMm, runs })),
-    widths,
-  );
-  const ink: Ink = [...head.ink];
-  const insides = singles.map(({ inside }) => linesIn([[regular(inside.join("    "))]], cellMm, widths));
-  const cellHeightMm = Math.max(PAPERS[paper].cellHeightMm, Math.max(...insides.map((lines) => lines.length)) * HEAD_PITCH_MM + 2);
-  for (const [i, { reading, row }] of singles.entries()) {
-    const at = { xMm: i * cellMm, yMm: head.heightMm, widthMm: cellMm, heightMm: cellHeightMm };
-    ink.push({ kind: "cell", ...at, strokeMm: HAIRLINE_MM, role: "cell", reading: reading.id, row });
-    centred(ink, insides[i] ?? [], at.xMm, cellMm, at.yMm, cellHeightMm, "cell");
+/** As many in a row as leave every label its two lines; a label that needs more gets them, one in a row. */
+function singlesAcross(singles: readonly Single[], across: Across): number {
+  return [3, 2].find((n) => n <= singles.length && singles.every((single) => singleCellMm(single, n, across) !== null)) ?? 1;
+}
+
+function singleRow(singles: readonly Single[], inRow: number, across: Across): Block {
+  const { paper, widthMm, widths } = across;
+  const eachMm = widthMm / inRow;
+  const set = singles.map((single) => {
+    const cellMm = singleCellMm(single, inRow, across) ?? Math.max(PAPERS[paper].cellWidthMm, eachMm * 0.4);
+    const labelMm = eachMm - cellMm - 2 * CELL_PAD_MM;
+    return {
+      ...single,
+      cellMm,
+      lines: linesIn([single.label], labelMm, widths),
+      insides: linesIn([[regular(single.inside)]], cellMm, widths),
+    };
+  });
+  const lines = Math.max(...set.map((s) => Math.max(s.lines.length, s.insides.length)));
+  const heightMm = Math.max(PAPERS[paper].cellHeightMm, lines * HEAD_PITCH_MM + 1);
+  const ink: Ink = [];
+  for (const [i, { reading, row, cellMm, lines, insides }] of set.entries()) {
+    const xMm = i * eachMm;
+    const cell = { xMm: xMm + eachMm - cellMm, yMm: 0, widthMm: cellMm, heightMm };
+    inkBox(ink, { xMm, yMm: 0, widthMm: eachMm, heightMm }, HAIRLINE_MM, "grid");
+    inkLines(ink, lines, xMm + 2 * CELL_PAD_MM, (heightMm - lines.length * HEAD_PITCH_MM) / 2, HEAD_PITCH_MM, {
+      sizePt: LABEL_PT,
+      role: "grid",
+    });
+    ink.push({ kind: "cell", ...cell, strokeMm: HAIRLINE_MM, role: "cell", reading: reading.id, row });
+    centred(ink, insides, cell.xMm, cellMm, 0, heightMm, "cell");
   }
-  return { ink, heightMm: head.heightMm + cellHeightMm };
+  return { ink, heightMm };
 }
 
+/** Rows of labelled cells; neighbours that allow it share a row. */
 export function singleBlocks(card: CardDocument, point: CardPoint, across: Across): Block[] {
-  const singles = singlesOf(card, point);
-  const texts = singles.filter((s) => s.reading.kind === "text");
-  const others = singles.filter((s) => s.reading.kind !== "text");
-  const each = Math.max(1, cellsAcross(others, across));
-  const rows = Array.from({ length: Math.ceil(others.length / each) }, (_, i) => others.slice(i * each, (i + 1) * each));
-  return [...rows, ...texts.map((text) => [text])].map((row) => singleRow(row, across));
+  const rows: { singles: Single[]; inRow: number }[] = [];
+  let rest = singlesOf(card, point);
+  while (rest.length > 0) {
+    const inRow = [3, 2, 1].find((n) => n <= rest.length && singlesAcross(rest.slice(0, n), across) === n) ?? 1;
+    rows.push({ singles: rest.slice(0, inRow), inRow });
+    rest = rest.slice(inRow);
+  }
+  return rows.map(({ singles, inRow }) => singleRow(singles, inRow, across));
 }
 
-const OUTCOME_MM = 9;
+const OUTCOME_MM = 7;
 const TICK_MM = 4.6;
 
 export function outcomeBlock(widthMm: number): Block {

@@ -12,6 +12,7 @@ import {
   printable,
   type Run,
   regular,
+  type SetLine,
   setLines,
   textWidthMm,
 } from "./typesetting";
@@ -80,11 +81,18 @@ export function entryRuns(card: CardDocument, point: CardPoint): Run[] {
   return [bold(positions), regular(positions === "" || rest === "" ? rest : `  ${rest}`)];
 }
 
-function lineBlock(runs: Run[], role: "entry" | "recovery", widthMm: number, widths: FontWidths): Block[] {
-  const lines = setLines(runs, widthMm - 2 * PAD_MM, STEP_PT, widths);
-  const ink: Ink = [];
-  const heightMm = inkLines(ink, lines, PAD_MM, 0, STEP_PITCH_MM, { sizePt: STEP_PT, role });
-  return lines.length === 0 ? [] : [{ ink, heightMm }];
+type Lines = { lines: SetLine[]; xMm: number; role: "entry" | "step" | "recovery" };
+
+/** One block a line: a text too long for any page then still breaks between lines. */
+function lineBlocks({ lines, xMm, role }: Lines): Block[] {
+  return lines.map((line) => {
+    const ink: Ink = [];
+    return { ink, heightMm: inkLines(ink, [line], xMm, 0, STEP_PITCH_MM, { sizePt: STEP_PT, role }) };
+  });
+}
+
+function runsBlocks(runs: Run[], role: "entry" | "recovery", widthMm: number, widths: FontWidths): Block[] {
+  return lineBlocks({ lines: setLines(runs, widthMm - 2 * PAD_MM, STEP_PT, widths), xMm: PAD_MM, role });
 }
 
 /** "a" to "z", then "aa". */
@@ -93,22 +101,20 @@ function letter(index: number): string {
   return index < 26 ? last : letter(Math.floor(index / 26) - 1) + last;
 }
 
-function stepBlock(text: string, index: number, widthMm: number, widths: FontWidths): Block {
-  const ink: Ink = [];
-  const lettering = { sizePt: STEP_PT, role: "step" as const };
-  const lines = setLines([regular(text)], widthMm - 2 * PAD_MM - LETTER_MM, STEP_PT, widths);
+function stepBlocks(text: string, index: number, widthMm: number, widths: FontWidths): Block[] {
+  const letterInk: Ink = [];
   const baselineMm = (STEP_PITCH_MM + capHeightMm(STEP_PT)) / 2;
-  inkText(ink, bold(letter(index)), { xMm: PAD_MM, baselineMm }, lettering);
-  const heightMm = Math.max(1, lines.length) * STEP_PITCH_MM;
-  inkLines(ink, lines, PAD_MM + LETTER_MM, 0, STEP_PITCH_MM, lettering);
-  return { ink, heightMm };
+  inkText(letterInk, bold(letter(index)), { xMm: PAD_MM, baselineMm }, { sizePt: STEP_PT, role: "step" });
+  const lines = setLines([regular(text)], widthMm - 2 * PAD_MM - LETTER_MM, STEP_PT, widths);
+  const [first, ...more] = lineBlocks({ lines, xMm: PAD_MM + LETTER_MM, role: "step" });
+  return [{ ink: [...letterInk, ...(first?.ink ?? [])], heightMm: STEP_PITCH_MM }, ...more];
 }
 
 /** Entry line, steps and recovery of a point, in the order in which they are read. */
 export function leadBlocks(card: CardDocument, point: CardPoint, widthMm: number, widths: FontWidths): Block[] {
   return [
-    ...lineBlock(entryRuns(card, point), "entry", widthMm, widths),
-    ...point.steps.map((step, index) => stepBlock(step.text, index, widthMm, widths)),
-    ...(point.recovery.trim() === "" ? [] : lineBlock([bold("RECOVER"), regular(`  ${point.recovery}`)], "recovery", widthMm, widths)),
+    ...runsBlocks(entryRuns(card, point), "entry", widthMm, widths),
+    ...point.steps.flatMap((step, index) => stepBlocks(step.text, index, widthMm, widths)),
+    ...(point.recovery.trim() === "" ? [] : runsBlocks([bold("RECOVER"), regular(`  ${point.recovery}`)], "recovery", widthMm, widths)),
   ];
 }

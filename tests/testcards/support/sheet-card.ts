@@ -388,7 +388,13 @@ export function sheetCard(points: CardPoint[] = [CLIMB], over: Partial<CardDocum
         maxMassKg: 600,
         emptyMassKg: 381,
         emptyArmM: 1.895,
-        envelope: [],
+        envelope: [
+          { massKg: 380, cgM: 1.9 },
+          { massKg: 500, cgM: 1.9 },
+          { massKg: 600, cgM: 1.96 },
+          { massKg: 600, cgM: 2.06 },
+          { massKg: 380, cgM: 2.06 },
+        ],
         stations: [
           { name: "Left seat", armM: 2.15, maxKg: 110 },
           { name: "Right seat", armM: 2.15, maxKg: 110 },
@@ -445,7 +451,7 @@ export function sheetCard(points: CardPoint[] = [CLIMB], over: Partial<CardDocum
       },
       standingAborts: STANDING,
       reactionMin: 0.5,
-      fuelPlan: { taxiL: 3, returnL: 7, reserveL: 15 },
+      fuelPlan: { taxiL: 3, returnL: 7, reserveL: 15, taxiMin: 8, returnMin: 10, resetMin: 2 },
       daMaximumFt: 4000,
       configuration: {
         id: "c-14",

@@ -1,6 +1,7 @@
 import type { Db } from "@/db/open";
 import * as table from "@/db/schema";
-import { climb, PROGRAMME } from "../testcards/support/ready-card";
+import { climb } from "../testcards/support/ready-card";
+import { PROGRAMME } from "../testcards/support/ready-programme";
 
 const AT = "2031-05-01T08:00:00.000Z";
 

@@ -94,10 +94,11 @@ describe("the abort number by the rule", () => {
 
   it("proposes 40 °F in 60 s for a fall of 26 °C a minute", () => {
     // 26 °C/min = 46.8 °F/min; U = 2 × 5/√6 × 1.04 = 4.25; (46.8 − 4.25)/1.04 = 40.9 → 40 on a dial readable to 5.
+    // The threshold itself, 42.55 °F a minute, is 42.55/1.8 = 23.64 °C a minute: a difference, without the 32.
     const point = climb();
     const proposal = proposeRateAbort(readyCard([point]), point, "cht", "max", "CHT-PANEL", 60);
     expect(proposal?.onGauge).toBe(40);
-    expect(proposal?.trueValue).toBeCloseTo(42.55, 2);
+    expect(proposal?.trueValue).toBeCloseTo(23.64, 2);
     // Over 6 s the dial cannot show it: 4.68 °F less 42 of U.
     expect(proposeRateAbort(readyCard([point]), point, "cht", "max", "CHT-PANEL", 6)).toBeNull();
   });

@@ -1,7 +1,8 @@
 import { describe, expect, it } from "vitest";
 import { reviewCard } from "@/lib/testcards/readiness";
 import { must, oneFinding, plain } from "../support/one-finding";
-import { climb, numberAbort, readyCard, readyContext, shut, soak } from "../support/ready-card";
+import { climb, readyCard, readyContext, shut, soak } from "../support/ready-card";
+import { numberAbort } from "../support/ready-programme";
 
 /* Coolant gauge 100 → 101.5, 120 → 122.5 °C: 107.5 reads 101.5 + 7.5 × 1.05 = 109.375 true (hand calculation). */
 describe("abort numbers against the card limit and the gauge", () => {

@@ -2,7 +2,8 @@ import { describe, expect, it } from "vitest";
 import { planLoad } from "@/lib/testcards/card-plan";
 import { reviewCard, reviewSortie } from "@/lib/testcards/readiness";
 import { must } from "../support/one-finding";
-import { climb, PROGRAMME, readyCard, readyContext, readySortie, readySortieContext, soak } from "../support/ready-card";
+import { climb, readyCard, readyContext, readySortie, readySortieContext, soak } from "../support/ready-card";
+import { PROGRAMME } from "../support/ready-programme";
 
 /* The programme's scenario of a release and a brief that are both refused: five findings at the card, three at the brief. */
 describe("release and brief refused", () => {

@@ -5,7 +5,7 @@ import { assembleCard, type CardContent, type CardIdentity, type ProgrammeSnapsh
 import { planCard } from "@/lib/testcards/card-plan";
 import { reviewCard } from "@/lib/testcards/readiness";
 import type { CardContext } from "@/lib/testcards/readiness-types";
-import { layOutSheet } from "@/lib/testcards/sheet";
+import { layOutSheet, sheetOverflow } from "@/lib/testcards/sheet";
 import type { CardState } from "@/lib/testcards/words";
 
 type PaperInput = {
@@ -22,7 +22,8 @@ export function useCardPaper({ programme, identity, content, context, state }: P
   return useMemo(() => {
     const card = assembleCard(programme, identity, settled);
     const pages = layOutSheet(card, { paper: "a5", state, widths: B612_WIDTHS });
-    const findings = reviewCard(card, { ...context, widths: B612_WIDTHS, digest: null, releasedDigest: null });
+    const overflow = sheetOverflow(card, B612_WIDTHS);
+    const findings = reviewCard(card, { ...context, widths: B612_WIDTHS, digest: null, releasedDigest: null }, { pages, overflow });
     return { card, pages, findings, facts: factsOf(card, pages.length) };
   }, [programme, identity, settled, context, state]);
 }

@@ -5,10 +5,10 @@ import { formatOnGauge, unitLabel } from "@/lib/format/unit";
 import { correctReading } from "@/lib/testcards/calibration";
 import type { AbortLine, CardDocument, CardPoint, Instrument } from "@/lib/testcards/card";
 import { abortsOf } from "@/lib/testcards/card";
-import { proposeAbort } from "@/lib/testcards/propose-abort";
-import type { Side } from "@/lib/testcards/words";
+import { proposeAbort, proposeRateAbort } from "@/lib/testcards/propose-abort";
+import type { LimitCondition, Side } from "@/lib/testcards/words";
 import { ChoiceField, NumberField, TextField, TickField } from "../fields";
-import { gaugeFromTrue, trueFromGauge } from "../gauge-both-ways";
+import { gaugeFromTrue, gaugeFromTrueRate, trueFromGauge, trueRateFromGauge } from "../gauge-both-ways";
 import type { PointPartProps } from "./point-editor";
 
 type NumberLine = Extract<AbortLine, { kind: "number" }>;
@@ -114,11 +114,19 @@ function AddNumber({ card, point, onAdd }: { card: CardDocument; point: CardPoin
   );
 }
 
+/** When the line holds: always where the programme has such a limit, else the first condition of this point that has one. */
+function conditionOf(card: CardDocument, point: CardPoint, parameter: string, side: Side): LimitCondition {
+  const rows = card.programme.limits.filter((limit) => limit.layer === "card" && limit.parameter === parameter && limit.side === side);
+  const whens = rows.map((limit) => limit.appliesWhen);
+  return whens.includes("always") ? "always" : (whens.find((when) => point.conditions.includes(when)) ?? "always");
+}
+
 /** By the rule where it can say a number, else at the top or foot of the calibrated range, to be set by hand. */
 function newLine(card: CardDocument, point: CardPoint, instrument: Instrument, side: Side, id: string): NumberLine | null {
   const parameter = card.programme.parameters.find(({ code }) => code === instrument.parameter);
   if (!parameter || !instrument.calibration) return null;
-  const proposal = proposeAbort(card, point, parameter.code, side, instrument.id);
+  const appliesWhen = conditionOf(card, point, parameter.code, side);
+  const proposal = proposeAbort(card, point, parameter.code, side, instrument.id, appliesWhen);
   const onGauge = proposal?.onGauge ?? (side === "max" ? instrument.calibration.high : instrument.calibration.low);
   const trueValue = proposal?.trueValue ?? trueFromGauge(onGauge, instrument, parameter.unit) ?? onGauge;
   const calledBy = instrument.visibleTo.includes("pilot") ? "pilot" : "observer";
@@ -128,7 +136,7 @@ function newLine(card: CardDocument, point: CardPoint, instrument: Instrument, s
     parameter: parameter.code,
     side,
     instrument: instrument.id,
-    appliesWhen: "always",
+    appliesWhen,
     trueValue,
     onGauge,
     setBy: proposal ? "rule" : "gauge",
@@ -144,12 +152,23 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
   const instrument = card.programme.instruments.find(({ id }) => id === line.instrument);
   const parameter = card.programme.parameters.find(({ code }) => code === line.parameter);
   if (!instrument || !parameter) return null;
-  const proposal = line.perMinute ? null : proposeAbort(card, point, line.parameter, line.side, line.instrument);
+  const windowS = line.windowS ?? 60;
+  const when = line.appliesWhen === "always" ? undefined : line.appliesWhen;
+  const proposal = line.perMinute
+    ? proposeRateAbort(card, point, line.parameter, line.side, line.instrument, windowS)
+    : proposeAbort(card, point, line.parameter, line.side, line.instrument, when);
+  const toTrue = (onGauge: number) =>
+    line.perMinute ? trueRateFromGauge(onGauge, windowS, instrument, parameter.unit) : trueFromGauge(onGauge, instrument, parameter.unit);
+  const toGauge = (trueValue: number) =>
+    line.perMinute
+      ? gaugeFromTrueRate(trueValue, parameter.unit, windowS, instrument)
+      : gaugeFromTrue(trueValue, parameter.unit, instrument);
   const offRule = proposal !== null && proposal.onGauge !== line.onGauge;
   return (
     <fieldset className="border border-rule p-3">
       <legend className="px-1 font-bold text-base">
-        {instrument.gaugeName} {line.side === "max" ? "at or above" : "at or below"}
+        {instrument.gaugeName} {line.perMinute ? `change in ${windowS} s ` : ""}
+        {line.side === "max" ? "at or above" : "at or below"}
       </legend>
       <div className="grid grid-cols-[1fr_1fr_auto] items-end gap-2">
         <NumberField
@@ -162,17 +181,17 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
               onChange({
                 ...line,
                 onGauge,
-                trueValue: tidy(trueFromGauge(onGauge, instrument, parameter.unit) ?? line.trueValue),
+                trueValue: tidy(toTrue(onGauge) ?? line.trueValue),
                 setBy: "gauge",
               });
           }}
         />
         <NumberField
-          label="True"
+          label={line.perMinute ? "True, a minute" : "True"}
           value={tidy(line.trueValue)}
           unit={unitLabel(parameter.unit)}
           onChange={(trueValue) => {
-            const onGauge = trueValue === null ? null : gaugeFromTrue(trueValue, parameter.unit, instrument);
+            const onGauge = trueValue === null ? null : toGauge(trueValue);
             if (trueValue !== null && onGauge !== null) onChange({ ...line, trueValue, onGauge: tidy(onGauge), setBy: "true" });
           }}
         />
@@ -180,9 +199,9 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
       </div>
       <p className="mt-2 text-sm text-ink-soft">
         {proposal
-          ? `By the rule: ${proposal.onGauge} on the gauge (${tidy(proposal.trueValue)} true).`
+          ? `By the rule: ${proposal.onGauge} on the gauge (${tidy(proposal.trueValue)} true${line.perMinute ? ", a minute" : ""}).`
           : "The rule has no card limit to start from here."}
-        {instrument.calibration && !correctReading(line.onGauge, instrument.calibration).inRange
+        {!line.perMinute && instrument.calibration && !correctReading(line.onGauge, instrument.calibration).inRange
           ? " This number lies outside the calibrated range."
           : ""}
       </p>

@@ -103,7 +103,9 @@ export type AbortLine =
       side: Side;
       instrument: string;
       appliesWhen: LimitCondition;
-      trueValue: number; // in the parameter's unit: by the rule, or turned back from the gauge when set there
+      /** In the parameter's unit; of a rate, a difference in it per minute. Set by the rule: the threshold the rule came to, before the
+       * number was rounded to a mark. Set true: as written. Set on the gauge: that number turned back. */
+      trueValue: number;
       onGauge: number; // what prints, in the gauge's unit
       setBy: "rule" | "true" | "gauge"; // who decided: the rule's proposal, or a person on either scale
       perMinute: boolean; // a rate: a change on the gauge over windowS

@@ -10,11 +10,11 @@ import {
 } from "./abort-limit";
 import { correctReading, gaugeAbort, gaugeRateAbort } from "./calibration";
 import { type CardDocument, type CardPoint, instrumentOf, parameterOf } from "./card";
-import { convert } from "./units";
+import { convert, convertDifference } from "./units";
 import type { LimitCondition, Side } from "./words";
 
 export type AbortProposal = {
-  trueValue: number; // the threshold, in the parameter's unit
+  trueValue: number; // the threshold, in the parameter's unit; of a rate, a difference in it per minute
   onGauge: number; // what prints, in the gauge's unit
   inRange: boolean; // false: the gauge was not proved there, print nothing
 };
@@ -53,7 +53,7 @@ export function proposeAbort(
 
 /**
  * The change on the gauge over a window at which a rate limit is called: card rate less U, turned to the gauge by the steepest
- * part of its table. `trueValue` is the threshold in the gauge's unit per minute.
+ * part of its table.
  */
 export function proposeRateAbort(
   card: CardDocument,
@@ -64,8 +64,9 @@ export function proposeRateAbort(
   windowS: number,
 ): AbortProposal | null {
   const instrument = instrumentOf(card, instrumentId);
+  const parameter = parameterOf(card, parameterCode);
   const atReading = instrument ? steepestReading(instrument) : null;
-  if (!instrument?.calibration || atReading === null || windowS <= 0) return null;
+  if (!instrument?.calibration || !parameter || atReading === null || windowS <= 0) return null;
   const { calibration, readable } = instrument;
   const windowMin = windowS / 60;
   const { slope } = correctReading(atReading, calibration);
@@ -74,5 +75,6 @@ export function proposeRateAbort(
   const cardRatePerMin = Math.min(...rates);
   if (rates.length === 0 || ((cardRatePerMin - expandedUncertaintyPerMin) * windowMin) / slope < readable) return null;
   const { printed } = gaugeRateAbort({ cardRatePerMin, expandedUncertaintyPerMin, readable, windowMin, atReading, calibration });
-  return { trueValue: cardRatePerMin - expandedUncertaintyPerMin, onGauge: printed, inRange: true };
+  const trueValue = convertDifference(cardRatePerMin - expandedUncertaintyPerMin, instrument.unit, parameter.unit);
+  return { trueValue, onGauge: printed, inRange: true };
 }

@@ -1,4 +1,5 @@
 import { describe, expect, test } from "vitest";
+import { gaugeFromTrueRate } from "@/components/builder/gauge-both-ways";
 import { HAZARDS } from "@/db/seed/hazards";
 import { INSTRUMENTS } from "@/db/seed/instruments";
 import { LIMITS } from "@/db/seed/limits";
@@ -7,7 +8,7 @@ import { NOTICE, SETTINGS } from "@/db/seed/settings";
 import { calibratedInstruments, demoSnapshot } from "@/db/seed/snapshot";
 import { TEST_POINTS } from "@/db/seed/test-points/shelf";
 import { B612_WIDTHS } from "@/lib/testcards/b612-widths";
-import { gaugeLimit } from "@/lib/testcards/calibration";
+import { gaugeLimit, roundToReadable } from "@/lib/testcards/calibration";
 import type { CardPoint } from "@/lib/testcards/card";
 import { planCard } from "@/lib/testcards/card-plan";
 import { proposeAbort, proposeRateAbort } from "@/lib/testcards/propose-abort";
@@ -82,10 +83,16 @@ describe("the numbers on the gauge", () => {
     expect(proposal?.onGauge).toBeCloseTo(printed, 9);
   });
 
-  // 26 °C/min is 46.8 °F/min; U of a 60 s fall read to 5 °F is 2.5 °C/min; over a slope of 1.04 that is 40.7 °F: 40 prints.
-  test("a fall of CHT is called at 40 °F in 60 s", () => {
+  // 26 °C/min less U 2.5 is 23.5 °C/min = 42.3 °F in 60 s; over a slope of 1.04 that is 40.67 °F: 40 prints.
+  test("a fall of CHT is called at 40 °F in 60 s, which is the mark below 23.5 °C a minute", () => {
     const point = named("T15");
-    expect(proposeRateAbort(alone(point), point, "cht", "max", instrumentNamed("CHT-PANEL").id, 60)?.onGauge).toBe(40);
+    const gauge = instrumentNamed("CHT-PANEL");
+    const line = point.aborts.lines.find((each) => each.kind === "number");
+    expect(line).toMatchObject({ parameter: "cht", perMinute: true, windowS: 60, trueValue: 23.5, onGauge: 40, setBy: "true" });
+    const onGauge = gaugeFromTrueRate(23.5, "degC", 60, gauge) ?? Number.NaN;
+    expect(onGauge).toBeCloseTo(40.673, 3);
+    expect(roundToReadable(onGauge, gauge.readable, "max")).toBe(40);
+    expect(proposeRateAbort(alone(point), point, "cht", "max", gauge.id, 60)?.onGauge).toBe(40);
   });
 
   test("every abort number that the rule set is the rule's own, its true threshold too", () => {

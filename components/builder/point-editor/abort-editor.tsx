@@ -163,6 +163,7 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
     line.perMinute
       ? gaugeFromTrueRate(trueValue, parameter.unit, windowS, instrument)
       : gaugeFromTrue(trueValue, parameter.unit, instrument);
+  const printedTrue = toTrue(line.onGauge);
   const offRule = proposal !== null && proposal.onGauge !== line.onGauge;
   return (
     <fieldset className="border border-rule p-3">
@@ -187,7 +188,7 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
           }}
         />
         <NumberField
-          label={line.perMinute ? "True, a minute" : "True"}
+          label={`True${line.perMinute ? ", a minute" : ""}${line.setBy === "rule" ? ", by the rule" : ""}`}
           value={tidy(line.trueValue)}
           unit={unitLabel(parameter.unit)}
           onChange={(trueValue) => {
@@ -199,8 +200,11 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
       </div>
       <p className="mt-2 text-sm text-ink-soft">
         {proposal
-          ? `By the rule: ${proposal.onGauge} on the gauge (${tidy(proposal.trueValue)} true${line.perMinute ? ", a minute" : ""}).`
+          ? `By the rule: ${tidy(proposal.trueValue)} true${line.perMinute ? " a minute" : ""}, which prints as ${proposal.onGauge} on the gauge.`
           : "The rule has no card limit to start from here."}
+        {printedTrue === null || line.setBy !== "rule"
+          ? ""
+          : ` As printed it is ${tidy(printedTrue)} true${line.perMinute ? " a minute" : ""}.`}
         {!line.perMinute && instrument.calibration && !correctReading(line.onGauge, instrument.calibration).inRange
           ? " This number lies outside the calibrated range."
           : ""}

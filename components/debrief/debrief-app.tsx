@@ -75,7 +75,7 @@ function Message({ title, children }: { title: string; children: React.ReactNode
 
 function Way({ href, children }: { href: string; children: React.ReactNode }) {
   return (
-    <a className="flex min-h-14 items-center justify-center rounded-md bg-spine font-bold text-spine-ink" href={href}>
+    <a className="flex min-h-14 items-center justify-center rounded-md border-2 border-ink bg-spine font-bold text-spine-ink" href={href}>
       {children}
     </a>
   );

@@ -141,7 +141,11 @@ export function DebriefForm({ pack, first, store }: { pack: DebriefPack; first: 
         {last ? (
           <span />
         ) : (
-          <button type="button" onClick={() => move(screen + 1)} className="min-h-14 rounded-md bg-spine font-bold text-spine-ink">
+          <button
+            type="button"
+            onClick={() => move(screen + 1)}
+            className="min-h-14 rounded-md border-2 border-ink bg-spine font-bold text-spine-ink"
+          >
             {screen < 1
               ? "Next: safety"
               : screen < points.length + 1
@@ -164,7 +168,7 @@ function Sent({ pack }: { pack: DebriefPack }) {
       <p>The debrief of sortie {sortie.number} is with the team. The readings are locked.</p>
       <p>Keep the pencilled sheets: they are the original record.</p>
       <a
-        className="flex min-h-14 items-center justify-center rounded-md bg-spine font-bold text-spine-ink"
+        className="flex min-h-14 items-center justify-center rounded-md border-2 border-ink bg-spine font-bold text-spine-ink"
         href={`/programmes/${sortie.programmeId}/sorties/${sortie.id}/results`}
       >
         Results

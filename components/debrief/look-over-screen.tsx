@@ -153,7 +153,7 @@ export function LookOverScreen({ pack, draft, errors, reports, screens, go, onSe
           setTried(true);
           if (wrong.size === 0) onSend();
         }}
-        className="min-h-14 rounded-md bg-spine font-bold text-spine-ink text-lg"
+        className="min-h-14 rounded-md border-2 border-ink bg-spine font-bold text-spine-ink text-lg"
       >
         {sending ? "Sending …" : "Send the debrief"}
       </button>

@@ -1,4 +1,4 @@
-import { formatNumber } from "@/lib/format/number";
+import { formatDerived, formatNumber, ownDecimals } from "@/lib/format/number";
 import { formatOnGauge, withUnit } from "@/lib/format/unit";
 import type { Instrument, Parameter } from "@/lib/testcards/card";
 import type { CheckLine } from "@/lib/testcards/debrief-types";
@@ -21,7 +21,9 @@ export function stripOf(
     normal: parameter?.normal && parameter.unit === unit ? { low: parameter.normal.low, high: parameter.normal.high } : null,
     limits: limits.flatMap((layer) => {
       const line = same.find(({ comparison, limit: one }) => comparison === `as flown, ${layer}` && one?.side === limit.side);
-      return line?.limit ? [{ layer, side: line.limit.side, value: line.limit.value, label: formatNumber(line.limit.value, 0) }] : [];
+      return line?.limit
+        ? [{ layer, side: line.limit.side, value: line.limit.value, label: formatNumber(line.limit.value, ownDecimals(line.limit.value)) }]
+        : [];
     }),
     marks: [
       {
@@ -35,7 +37,7 @@ export function stripOf(
               kind: "true" as const,
               value: asTrue.value,
               expandedUncertainty: asTrue.expandedUncertainty,
-              label: `${formatNumber(asTrue.value, 1)} true`,
+              label: `${formatDerived(asTrue.value)} true`,
             },
           ]
         : []),
@@ -45,7 +47,7 @@ export function stripOf(
               kind: "hot day" as const,
               value: hotDay.value,
               expandedUncertainty: hotDay.expandedUncertainty,
-              label: `${formatNumber(hotDay.value, 1)} hot day`,
+              label: `${formatDerived(hotDay.value)} hot day`,
             },
           ]
         : []),

@@ -1,7 +1,7 @@
 import { VerdictMark } from "@/components/gauge/verdict-mark";
 import { Cell, HeadCell, Row, RowHead, Table, TableHead } from "@/components/ui/table";
-import { formatMargin, formatNumber, formatUncertainty, ownDecimals } from "@/lib/format/number";
-import { unitLabel, withUnit } from "@/lib/format/unit";
+import { formatDerived, formatMargin, formatNumber, formatUncertainty, ownDecimals } from "@/lib/format/number";
+import { formatQuantity, unitLabel, withUnit } from "@/lib/format/unit";
 import type { CheckLine } from "@/lib/testcards/debrief-types";
 import type { ResultRow } from "./result-rows";
 
@@ -133,13 +133,10 @@ function onGauge({ onGauge: value }: CheckLine) {
   return value ? withUnit(formatNumber(value.value, ownDecimals(value.value, 2)), value.unit) : NONE;
 }
 
-/** One decimal as the trade writes temperatures and pressures; none where the figure runs into thousands. */
-const shown = (value: number) => (Math.abs(value) >= 1000 ? 0 : 1);
-
 function asTrue({ asTrue: value }: CheckLine) {
   return value ? (
     <>
-      {withUnit(formatNumber(value.value, shown(value.value)), value.unit)}
+      {withUnit(formatDerived(value.value), value.unit)}
       <span className="block text-ink-soft text-sm">{formatUncertainty(value.expandedUncertainty)}</span>
     </>
   ) : (
@@ -149,14 +146,16 @@ function asTrue({ asTrue: value }: CheckLine) {
 
 function hotDay(line: CheckLine | null) {
   if (!line?.hotDay) return NONE;
-  const { value, unit, expandedUncertainty, difference, clamped, basis } = line.hotDay;
+  const { value, unit, expandedUncertainty, ambient, hotAmbient, clamped } = line.hotDay;
   return (
     <>
-      {withUnit(formatNumber(value, shown(value)), unit)}
+      {withUnit(formatDerived(value), unit)}
       <span className="block text-ink-soft text-sm">
         {formatUncertainty(expandedUncertainty)}
         <br />
-        {clamped ? "hotter than the hot day: nothing subtracted" : `${basis}, add ${formatNumber(difference, 2)}`}
+        {clamped
+          ? "hotter than the hot day: nothing subtracted"
+          : `air ${formatNumber(ambient.value, 1)}, hot day ${formatQuantity(hotAmbient, 2)}`}
       </span>
     </>
   );

@@ -26,6 +26,11 @@ export function formatUncertainty(value: number | null, decimals = 1): string {
   return value === null ? "U unknown" : `±${formatNumber(value, decimals)}`;
 }
 
+/** A true or hot-day value: one decimal as the trade writes temperatures and pressures, none where it runs into thousands. */
+export function formatDerived(value: number): string {
+  return formatNumber(value, Math.abs(value) >= 1000 ? 0 : 1);
+}
+
 /** Decimals that a resolution needs: 2.5 needs one, 0.25 two, 10 none. */
 export function decimalsOf(resolution: number): number {
   for (let decimals = 0; decimals < 6; decimals++) {

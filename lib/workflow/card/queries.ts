@@ -12,7 +12,7 @@ import { digestOf } from "../digest";
 import { getProgramme } from "../programme/queries";
 import { getReadinessFacts } from "./context";
 import * as policy from "./policy";
-import { type CardRow, getCard, getDocument, listRevisions, type RevisionRow } from "./rows";
+import { type CardRow, getCard, getDocument, type RevisionRow } from "./rows";
 
 type Reader = Db | Tx;
 
@@ -112,8 +112,7 @@ export type CardView = {
 
 /** One revision (the newest unless a letter is named) with all that its screens need. */
 export function getCardRevision(db: Reader, actor: Actor, cardId: string, { today, letter }: { today: string; letter?: string }): CardView {
-  const { card, revision, document } = getDocument(db, actor, cardId, letter);
-  const revisions = listRevisions(db, actor, cardId);
+  const { card, revision, revisions, document } = getDocument(db, actor, cardId, letter);
   const newest = revisions[0] ?? revision;
   const digest = revision.digest ?? digestOf(document);
   const context: CardContext = {

@@ -42,7 +42,11 @@ export type RevisionRow = ReturnType<typeof listRevisions>[number];
 
 /** The named revision, or the newest. */
 export function getRevisionRow(db: Reader, actor: Actor, cardId: string, letter?: string): RevisionRow {
-  const row = listRevisions(db, actor, cardId).find((revision) => letter === undefined || revision.letter === letter);
+  return pickRevision(listRevisions(db, actor, cardId), letter);
+}
+
+function pickRevision(revisions: RevisionRow[], letter: string | undefined): RevisionRow {
+  const row = revisions.find((revision) => letter === undefined || revision.letter === letter);
   if (!row) throw new Refusal("not-found", "This card has no such revision.");
   return row;
 }
@@ -63,7 +67,8 @@ export function documentOf(card: Pick<CardRow, "id" | "number">, revision: Docum
 
 export function getDocument(db: Reader, actor: Actor, cardId: string, letter?: string) {
   const card = getCard(db, actor, cardId);
-  const revision = getRevisionRow(db, actor, cardId, letter);
+  const revisions = listRevisions(db, actor, cardId);
+  const revision = pickRevision(revisions, letter);
   const document = documentOf(card, revision, () => getProgrammeSnapshot(db, actor, card.programmeId));
-  return { card, revision, document };
+  return { card, revision, revisions, document };
 }

@@ -1,6 +1,6 @@
 "use client";
 import { Monitor, Moon, Sun } from "lucide-react";
-import { useState } from "react";
+import { useEffect, useState } from "react";
 import { DropdownMenuLabel, DropdownMenuRadioGroup, DropdownMenuRadioItem } from "@/components/ui/dropdown-menu";
 import { LIGHT_COOKIE, LIGHT_WORDS, LIGHTS, type Light, readLight } from "./light";
 
@@ -9,6 +9,8 @@ const YEAR_S = 31_536_000;
 
 function useLight(initial: Light): [Light, (light: Light) => void] {
   const [light, setLight] = useState(initial);
+  // Another switch on the page may have been used since it was rendered.
+  useEffect(() => setLight(readLight(document.documentElement.dataset.light)), []);
   const choose = (next: Light) => {
     setLight(next);
     if (next === "system") delete document.documentElement.dataset.light;
@@ -23,7 +25,7 @@ function useLight(initial: Light): [Light, (light: Light) => void] {
 export function LightSwitch({ initial }: { initial: Light }) {
   const [light, choose] = useLight(initial);
   return (
-    <fieldset className="inline-flex max-w-full flex-wrap rounded-md border border-control">
+    <fieldset className="inline-grid max-w-full grid-cols-3 rounded-md border border-control">
       <legend className="sr-only">Light</legend>
       {LIGHTS.map((each) => {
         const Icon = ICON[each];
@@ -33,7 +35,7 @@ export function LightSwitch({ initial }: { initial: Light }) {
             type="button"
             aria-pressed={light === each}
             onClick={() => choose(each)}
-            className="inline-flex min-h-11 items-center gap-2 whitespace-nowrap rounded-sm px-3 aria-pressed:bg-ink aria-pressed:text-paper"
+            className="inline-flex min-h-11 items-center justify-center gap-x-2 whitespace-nowrap rounded-sm px-3 max-hand:min-h-14 max-hand:flex-col max-hand:px-2 aria-pressed:bg-ink aria-pressed:text-paper"
           >
             <Icon aria-hidden="true" className="size-4" />
             {LIGHT_WORDS[each]}

@@ -27,7 +27,7 @@ export function AlertDialog({
     <Radix.Root>
       <Radix.Trigger asChild>{trigger}</Radix.Trigger>
       <Radix.Portal>
-        <Radix.Overlay className="fixed inset-0 z-40 bg-ink/40" />
+        <Radix.Overlay className="fixed inset-0 z-40 bg-[rgb(0_0_0/0.5)]" />
         <Radix.Content className="-translate-x-1/2 -translate-y-1/2 fixed top-1/2 left-1/2 z-50 flex max-h-[90dvh] w-[min(30rem,calc(100vw-2rem))] flex-col gap-4 overflow-y-auto rounded-lg border border-ink bg-sheet p-5 text-ink">
           <div>
             <Radix.Title className="font-bold text-lg">{title}</Radix.Title>

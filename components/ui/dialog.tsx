@@ -24,7 +24,7 @@ export function DialogContent({
 }) {
   return (
     <Radix.Portal>
-      <Radix.Overlay className="fixed inset-0 z-40 bg-ink/40" />
+      <Radix.Overlay className="fixed inset-0 z-40 bg-[rgb(0_0_0/0.5)]" />
       <Radix.Content
         {...(description ? {} : { "aria-describedby": undefined })}
         className={classNames(

@@ -35,7 +35,7 @@ export function RaiseSquawkForm({
         error={state.fieldErrors.severity}
       >
         {(props) => (
-          <Select {...props} key={state.values.severity} defaultValue={state.values.severity ?? ""}>
+          <Select key={state.values.severity} {...props} defaultValue={state.values.severity ?? ""}>
             <option value="" disabled>
               Choose
             </option>
@@ -57,7 +57,7 @@ export function RaiseSquawkForm({
       </Field>
       <Field name="sortieId" label="Sortie" error={state.fieldErrors.sortieId}>
         {(props) => (
-          <Select {...props} key={state.values.sortieId} defaultValue={state.values.sortieId ?? ""}>
+          <Select key={state.values.sortieId} {...props} defaultValue={state.values.sortieId ?? ""}>
             <option value="">none</option>
             {sorties.map(({ id, label }) => (
               <option key={id} value={id}>

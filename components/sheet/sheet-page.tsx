@@ -26,7 +26,7 @@ export function SheetPageView({ page, widthPx, code = null }: { page: SheetPage;
         viewBox={`0 0 ${page.widthMm} ${page.heightMm}`}
         role="img"
         aria-label={name}
-        style={{ display: "block", background: "#fff", fontKerning: "none", fontFamily: "var(--font-b612), B612, sans-serif" }}
+        style={{ display: "block", background: "#fff", fontKerning: "none", fontFamily: "var(--font-b612, B612), B612, sans-serif" }}
       >
         <SheetDrawing items={page.items} code={code} />
       </svg>

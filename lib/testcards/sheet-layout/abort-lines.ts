@@ -1,10 +1,8 @@
-import { type AbortLine, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf } from "../card";
+import { type AbortLine, type AbortNumber, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf } from "../card";
 import { figure, withUnit } from "./gauge-figures";
 import type { ListLine } from "./limit-lines";
 
 export type AbortList = { ifReached: boolean; lines: ListLine[]; events: string[] };
-
-type NumberLine = Extract<AbortLine, { kind: "number" }>;
 
 function inForce(point: CardPoint, line: AbortLine): boolean {
   return (
@@ -12,7 +10,7 @@ function inForce(point: CardPoint, line: AbortLine): boolean {
   );
 }
 
-function numberLine(card: CardDocument, line: NumberLine): ListLine {
+function numberLine(card: CardDocument, line: AbortNumber): ListLine {
   const instrument = instrumentOf(card, line.instrument);
   const gauge = instrument?.gaugeName ?? line.instrument;
   const name = line.perMinute ? (parameterOf(card, line.parameter)?.shortName ?? gauge) : gauge;

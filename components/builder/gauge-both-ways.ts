@@ -3,6 +3,9 @@ import { correctReading, readingFor } from "@/lib/testcards/calibration";
 import type { Instrument } from "@/lib/testcards/card";
 import { convert, convertDifference, type Unit } from "@/lib/testcards/units";
 
+/** As many decimals as an editor shows. */
+export const tidy = (value: number): number => Number(value.toFixed(2));
+
 /** The true value behind a gauge number, in `unit`; null where the gauge proves nothing there. */
 export function trueFromGauge(onGauge: number, instrument: Instrument, unit: Unit): number | null {
   if (!instrument.calibration) return null;

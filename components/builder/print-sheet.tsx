@@ -1,5 +1,6 @@
 "use client";
 import { useState } from "react";
+import { Problem } from "@/components/form/problem";
 import { callApi } from "@/components/live/call-api";
 import { Button } from "@/components/ui/button";
 
@@ -31,11 +32,7 @@ export function PrintSheet({ cardId, letter, disabled = false }: { cardId: strin
           Open the sheet (PDF, A5)
         </a>
       ) : null}
-      {problem ? (
-        <p role="alert" className="text-ink-red">
-          {problem}
-        </p>
-      ) : null}
+      <Problem text={problem} />
     </>
   );
 }

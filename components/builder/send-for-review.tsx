@@ -1,6 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
+import { Problem } from "@/components/form/problem";
 import { callApi } from "@/components/live/call-api";
 import { Button } from "@/components/ui/button";
 import type { Finding } from "@/lib/testcards/readiness-types";
@@ -35,11 +36,7 @@ export function SendForReview({ cardId, letter, version, saved, findings, answer
       <Button variant="main" onClick={send} disabled={busy}>
         {busy ? "Sending …" : "Send for review"}
       </Button>
-      {problem ? (
-        <p role="alert" className="text-ink-red">
-          {problem}
-        </p>
-      ) : null}
+      <Problem text={problem} />
       <PrintSheet cardId={cardId} letter={letter} disabled={!saved} />
     </div>
   );

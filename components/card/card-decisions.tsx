@@ -1,6 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { type FormEvent, useState } from "react";
+import { Problem } from "@/components/form/problem";
 import { type ApiProblem, callApi } from "@/components/live/call-api";
 import { Button, type ButtonVariant } from "@/components/ui/button";
 import { Dialog, DialogContent, DialogTrigger } from "@/components/ui/dialog";
@@ -174,11 +175,7 @@ function Revise({ cardId }: { cardId: string }) {
       <Button onClick={revise} disabled={busy}>
         {busy ? "Starting …" : "Start the next revision"}
       </Button>
-      {problem ? (
-        <p role="alert" className="text-ink-red">
-          {problem}
-        </p>
-      ) : null}
+      <Problem text={problem} />
     </>
   );
 }

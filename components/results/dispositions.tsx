@@ -1,6 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
+import { Problem } from "@/components/form/problem";
 import { callApi } from "@/components/live/call-api";
 import { Button } from "@/components/ui/button";
 import { Input } from "@/components/ui/input";
@@ -65,11 +66,7 @@ function OnePoint({ sortieId, point }: { sortieId: string; point: Disposed }) {
       <Button disabled={busy} onClick={send}>
         {busy ? "Recording …" : "Record"}
       </Button>
-      {problem ? (
-        <p role="alert" className="text-ink-red hand:col-span-4">
-          {problem}
-        </p>
-      ) : null}
+      <Problem text={problem} className="hand:col-span-4" />
     </div>
   );
 }

@@ -1,6 +1,7 @@
 "use client";
 import { useRouter } from "next/navigation";
 import { useId, useState } from "react";
+import { Problem } from "@/components/form/problem";
 import { callApi } from "@/components/live/call-api";
 import { Button } from "@/components/ui/button";
 import { Input } from "@/components/ui/input";
@@ -47,11 +48,7 @@ export function AnswerCard({ sortieId, revisionId, digest, answered }: AnswerPro
           </Button>
         </div>
       ) : null}
-      {problem ? (
-        <p role="alert" className="text-ink-red">
-          {problem}
-        </p>
-      ) : null}
+      <Problem text={problem} />
     </div>
   );
 }

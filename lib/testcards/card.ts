@@ -114,6 +114,9 @@ export type AbortLine =
     }
   | { kind: "event"; id: string; text: string };
 
+/** The kind with a number. */
+export type AbortNumber = Extract<AbortLine, { kind: "number" }>;
+
 export type EntryCondition = {
   id: string;
   parameter: string;

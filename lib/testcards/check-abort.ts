@@ -1,11 +1,9 @@
 /** Comparison (i): the gauge against the number to abort at. It says whether a call was due; a call is never questioned. */
-import { type AbortLine, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf, type Reading } from "./card";
+import { type AbortNumber, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf, type Reading } from "./card";
 import { converted, extremeOf, isUsable, rawRows, speaksFor } from "./check-gauge";
 import { clock } from "./check-limits";
 import type { AbortCall, CheckLine, Debrief, DisciplineLine, PointDebrief, ReadingEntry } from "./debrief-types";
 import { abortDiscipline, largestFall } from "./verdict";
-
-type NumberLine = Extract<AbortLine, { kind: "number" }>;
 
 const ROUNDING = 1e-9;
 
@@ -45,21 +43,21 @@ function entryOf(said: PointDebrief | null, reading: Reading): ReadingEntry | nu
   return said?.readings.find((entry) => entry.reading === reading.id) ?? null;
 }
 
-function isFor(card: CardDocument, call: AbortCall, line: NumberLine): boolean {
+function isFor(card: CardDocument, call: AbortCall, line: AbortNumber): boolean {
   const parameter = parameterOf(card, line.parameter);
   const trigger = call.trigger.trim().toLowerCase();
   return [line.parameter, parameter?.name, parameter?.shortName].some((name) => name?.toLowerCase() === trigger);
 }
 
 /** The number counts on the instrument it is printed for, and while its condition holds. */
-function watches(reading: Reading, line: NumberLine): boolean {
+function watches(reading: Reading, line: AbortNumber): boolean {
   if (reading.kind !== "number" && reading.kind !== "count") return false;
   const inForce = line.appliesWhen === "always" || reading.conditions.includes(line.appliesWhen);
   const shows = line.perMinute ? reading.sampling === "series" : speaksFor(reading, line.side);
   return reading.parameter === line.parameter && reading.instrument === line.instrument && inForce && shows;
 }
 
-function worstRead(card: CardDocument, line: NumberLine, reading: Reading, entry: ReadingEntry | null): number | null {
+function worstRead(card: CardDocument, line: AbortNumber, reading: Reading, entry: ReadingEntry | null): number | null {
   const unit = instrumentOf(card, reading.instrument)?.unit;
   if (line.perMinute) return entry && fallOnGauge(entry, line.windowS ?? 60);
   const raw = extremeOf(reading, entry, line.side);
@@ -75,19 +73,19 @@ function fallOnGauge(entry: ReadingEntry, windowS: number): number | null {
   return (largestFall(series, { windowS }).perMin * windowS) / 60;
 }
 
-function worstOf(line: NumberLine, values: number[]): number | null {
+function worstOf(line: AbortNumber, values: number[]): number | null {
   if (values.length === 0) return null;
   return line.side === "max" ? Math.max(...values) : Math.min(...values);
 }
 
-function isReached(line: NumberLine, value: number): boolean {
+function isReached(line: AbortNumber, value: number): boolean {
   return line.side === "max" ? value >= line.onGauge - ROUNDING : value <= line.onGauge + ROUNDING;
 }
 
 function abortLine(
   point: CardPoint,
   reading: Reading,
-  line: NumberLine,
+  line: AbortNumber,
   value: number,
   unit: DisciplineLine["unit"],
   discipline: DisciplineLine["discipline"],

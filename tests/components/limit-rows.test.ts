@@ -2,16 +2,15 @@ import { describe, expect, test } from "vitest";
 import { abortRow } from "@/app/(desk)/programmes/[programme]/limits/limit-rows";
 import { demoSnapshot } from "@/db/seed/snapshot";
 import { testPointNamed } from "@/db/seed/test-points/shelf";
-import type { AbortLine } from "@/lib/testcards/card";
+import type { AbortLine, AbortNumber } from "@/lib/testcards/card";
 
 const programme = demoSnapshot("2031-05-09");
-type NumberLine = Extract<AbortLine, { kind: "number" }>;
-const numberOf = (lines: AbortLine[], parameter: string): NumberLine => {
+const numberOf = (lines: AbortLine[], parameter: string): AbortNumber => {
   const found = lines.find((line) => line.kind === "number" && line.parameter === parameter);
   if (found?.kind !== "number") throw new Error(parameter);
   return found;
 };
-const rowOf = (line: NumberLine) => {
+const rowOf = (line: AbortNumber) => {
   const parameter = programme.parameters.find(({ code }) => code === line.parameter);
   if (!parameter) throw new Error(line.parameter);
   const gauge = programme.instruments.find(({ id }) => id === line.instrument);

@@ -3,17 +3,13 @@ import { Plus, Trash2 } from "lucide-react";
 import { buttonClass } from "@/components/ui/button";
 import { formatOnGauge, unitLabel } from "@/lib/format/unit";
 import { correctReading } from "@/lib/testcards/calibration";
-import type { AbortLine, CardDocument, CardPoint, Instrument } from "@/lib/testcards/card";
+import type { AbortLine, AbortNumber, CardDocument, CardPoint, Instrument } from "@/lib/testcards/card";
 import { abortsOf } from "@/lib/testcards/card";
 import { proposeAbort, proposeRateAbort } from "@/lib/testcards/propose-abort";
 import type { LimitCondition, Side } from "@/lib/testcards/words";
 import { ChoiceField, NumberField, TextField, TickField } from "../fields";
-import { gaugeFromTrue, gaugeFromTrueRate, trueFromGauge, trueRateFromGauge } from "../gauge-both-ways";
+import { gaugeFromTrue, gaugeFromTrueRate, tidy, trueFromGauge, trueRateFromGauge } from "../gauge-both-ways";
 import type { PointPartProps } from "./point-editor";
-
-type NumberLine = Extract<AbortLine, { kind: "number" }>;
-
-const tidy = (value: number) => Number(value.toFixed(2));
 
 /** Abort lines: a number set on the gauge shows what it truly is, and the other way round; the rule proposes one. */
 export function AbortEditor({ card, point, change, newId }: PointPartProps) {
@@ -122,7 +118,7 @@ function conditionOf(card: CardDocument, point: CardPoint, parameter: string, si
 }
 
 /** By the rule where it can say a number, else at the top or foot of the calibrated range, to be set by hand. */
-function newLine(card: CardDocument, point: CardPoint, instrument: Instrument, side: Side, id: string): NumberLine | null {
+function newLine(card: CardDocument, point: CardPoint, instrument: Instrument, side: Side, id: string): AbortNumber | null {
   const parameter = card.programme.parameters.find(({ code }) => code === instrument.parameter);
   if (!parameter || !instrument.calibration) return null;
   const appliesWhen = conditionOf(card, point, parameter.code, side);
@@ -146,7 +142,7 @@ function newLine(card: CardDocument, point: CardPoint, instrument: Instrument, s
   };
 }
 
-type LineProps = { card: CardDocument; point: CardPoint; line: NumberLine; onChange: (line: NumberLine) => void; onRemove: () => void };
+type LineProps = { card: CardDocument; point: CardPoint; line: AbortNumber; onChange: (line: AbortNumber) => void; onRemove: () => void };
 
 function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) {
   const instrument = card.programme.instruments.find(({ id }) => id === line.instrument);

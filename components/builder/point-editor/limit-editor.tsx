@@ -4,11 +4,9 @@ import { formatNumber } from "@/lib/format/number";
 import { unitLabel, withUnit } from "@/lib/format/unit";
 import { instrumentOf, type PointLimit, parameterOf } from "@/lib/testcards/card";
 import { ChoiceField, NumberField, TextField, TickField } from "../fields";
-import { gaugeFromTrue, trueFromGauge, uncertaintyIn } from "../gauge-both-ways";
+import { gaugeFromTrue, tidy, trueFromGauge, uncertaintyIn } from "../gauge-both-ways";
 import { RemoveButton } from "./abort-editor";
 import type { PointPartProps } from "./point-editor";
-
-const tidy = (value: number) => Number(value.toFixed(2));
 
 /** The card table and the point's own limits; each own limit true and on the gauge, either one to be typed. */
 export function LimitEditor({ card, point, change, newId }: PointPartProps) {

@@ -1,4 +1,4 @@
-import type { AbortLine, CardPoint, EntryCondition, PointLimit, Reading, Step } from "@/lib/testcards/card";
+import type { AbortLine, AbortNumber, CardPoint, EntryCondition, PointLimit, Reading, Step } from "@/lib/testcards/card";
 import type { Unit } from "@/lib/testcards/units";
 import type { LimitCondition, LimitStatistic, Side } from "@/lib/testcards/words";
 import { seedId } from "../ids";
@@ -30,11 +30,10 @@ export function ownLimit(
   };
 }
 
-type NumberAbort = Extract<AbortLine, { kind: "number" }>;
-type AbortOptions = { side?: Side; when?: LimitCondition; setBy?: NumberAbort["setBy"]; by?: NumberAbort["calledBy"]; windowS?: number };
+type AbortOptions = { side?: Side; when?: LimitCondition; setBy?: AbortNumber["setBy"]; by?: AbortNumber["calledBy"]; windowS?: number };
 
 /** `trueValue` is the threshold of the rule in the parameter's unit, `onGauge` the number that prints. */
-export function abortAt(parameter: string, on: string, trueValue: number, onGauge: number, options: AbortOptions = {}): NumberAbort {
+export function abortAt(parameter: string, on: string, trueValue: number, onGauge: number, options: AbortOptions = {}): AbortNumber {
   const side = options.side ?? "max";
   return {
     kind: "number",

@@ -10,10 +10,10 @@ import {
   uncertaintyOf,
 } from "../abort-limit";
 import { correctReading, roundToReadable } from "../calibration";
-import type { Instrument, Parameter } from "../card";
+import type { AbortNumber, Instrument, Parameter } from "../card";
 import { proposeAbort, proposeRateAbort } from "../propose-abort";
 import { convert } from "../units";
-import { atPoint, type CardFacts, isNumber, type NumberLine, type PointFacts, type Problem, type Rule, whereItFits } from "./rule";
+import { atPoint, type CardFacts, isNumber, type PointFacts, type Problem, type Rule, whereItFits } from "./rule";
 import { apart, figure, midSentence, onGaugeFigure, withUnit } from "./say";
 
 /** A value within this of a mark is on the mark (team's own rule). */
@@ -21,7 +21,7 @@ const ON_THE_MARK = 1e-6;
 /** Stored true values are written to one decimal: a turned-back gauge number may differ by that much. */
 const AS_WRITTEN = 0.1 + ON_THE_MARK;
 
-type Dial = { instrument: Instrument; parameter: Parameter; line: NumberLine; at: PointFacts };
+type Dial = { instrument: Instrument; parameter: Parameter; line: AbortNumber; at: PointFacts };
 
 /** Six rules ask for the same lines of the same point. */
 const dialsOf = new WeakMap<PointFacts, Dial[]>();
@@ -40,7 +40,7 @@ function dialsAt(facts: CardFacts, at: PointFacts): Dial[] {
 
 const isOwn = ({ line, at }: Dial): boolean => at.point.aborts.lines.some((own) => own.id === line.id);
 const asShown = ({ line, instrument }: Dial): string => withUnit(onGaugeFigure(line.onGauge, instrument.readable), instrument.unit);
-const past = (value: number, limit: number, side: NumberLine["side"]): boolean =>
+const past = (value: number, limit: number, side: AbortNumber["side"]): boolean =>
   side === "max" ? value > limit + ON_THE_MARK : value < limit - ON_THE_MARK;
 
 /** One problem per point for its own lines, one for the whole card for a standing line that is wrong wherever it stands. */

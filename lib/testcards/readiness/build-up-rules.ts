@@ -1,8 +1,8 @@
 import { predictNext } from "../buildup";
 import { correctReading } from "../calibration";
-import type { CardPoint } from "../card";
+import type { AbortNumber, CardPoint } from "../card";
 import { convert, type Unit } from "../units";
-import { atPoint, type CardFacts, isNumber, type NumberLine, type PointFacts, type Problem, type Rule, whereItFits } from "./rule";
+import { atPoint, type CardFacts, isNumber, type PointFacts, type Problem, type Rule, whereItFits } from "./rule";
 import { amount, apart, figure, list, midSentence, quantity, withUnit } from "./say";
 
 const CONFIDENCE = 0.95;
@@ -88,7 +88,7 @@ function twoChanges(facts: CardFacts): Problem[] {
 }
 
 /** The abort number as the pilot will see it, turned back to true, in the parameter's unit. */
-function thresholdOf(facts: CardFacts, line: NumberLine): { value: number; name: string; unit: Unit } | null {
+function thresholdOf(facts: CardFacts, line: AbortNumber): { value: number; name: string; unit: Unit } | null {
   const instrument = facts.instruments.get(line.instrument);
   const parameter = facts.parameters.get(line.parameter);
   const calibration = instrument?.calibration;
@@ -101,7 +101,7 @@ function thresholdOf(facts: CardFacts, line: NumberLine): { value: number; name:
 }
 
 /** The highest value that the point itself expects of a parameter, in that parameter's unit. */
-function expectedHigh(facts: CardFacts, at: PointFacts, line: NumberLine): number | null {
+function expectedHigh(facts: CardFacts, at: PointFacts, line: AbortNumber): number | null {
   const unit = facts.parameters.get(line.parameter)?.unit;
   const highs = at.point.readings.flatMap((r) => {
     const band = r.parameter === line.parameter ? r.expected : null;
@@ -112,7 +112,7 @@ function expectedHigh(facts: CardFacts, at: PointFacts, line: NumberLine): numbe
   return highs.length > 0 ? Math.max(...highs) : null;
 }
 
-function predicted(facts: CardFacts, at: PointFacts, line: NumberLine): number | null {
+function predicted(facts: CardFacts, at: PointFacts, line: AbortNumber): number | null {
   const { series } = at.point;
   const run = series && !series.base ? resultsFor(facts, at.point) : undefined;
   if (!series || !run || run.results.length < FEWEST_RESULTS) return null;

@@ -1,11 +1,19 @@
-import type { AbortLine, CardContent, CardDocument, CardPoint, Control, Instrument, Parameter, ProgrammeSnapshot } from "../card";
+import type {
+  AbortLine,
+  AbortNumber,
+  CardContent,
+  CardDocument,
+  CardPoint,
+  Control,
+  Instrument,
+  Parameter,
+  ProgrammeSnapshot,
+} from "../card";
 import type { Finding, FindingPlace, SortieContext, SortiePlan } from "../readiness-types";
 import type { SheetOverflow, SheetPage } from "../sheet-types";
 
 /** One thing a rule found: the sentence and the place. Code and severity are the rule's. */
 export type Problem = { message: string; where: FindingPlace };
-
-export type NumberLine = Extract<AbortLine, { kind: "number" }>;
 
 /** The sheet as laid out, for the rules that look at paper. Null: nothing was laid out, those rules stay silent. */
 export type SheetFacts = { overflow: SheetOverflow[]; pages: SheetPage[] } | null;
@@ -47,7 +55,7 @@ export type Rule = {
   sortie?: (facts: SortieFacts) => Problem[];
 };
 
-export const isNumber = (line: AbortLine): line is NumberLine => line.kind === "number";
+export const isNumber = (line: AbortLine): line is AbortNumber => line.kind === "number";
 
 type PointField = Extract<FindingPlace, { at: "point" }>["field"];
 

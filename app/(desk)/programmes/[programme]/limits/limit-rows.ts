@@ -1,11 +1,10 @@
 import { formatNumber, ownDecimals } from "@/lib/format/number";
 import { formatOnGauge, formatQuantity, withUnit } from "@/lib/format/unit";
 import { correctReading, readingFor } from "@/lib/testcards/calibration";
-import type { AbortLine, Instrument, Limit, Parameter } from "@/lib/testcards/card";
+import type { AbortNumber, Instrument, Limit, Parameter } from "@/lib/testcards/card";
 import { bandOnGauge, differenceOnGauge, onGauge } from "@/lib/testcards/sheet-layout/gauge-figures";
 import { convert, rateUnitOf, sameDimension } from "@/lib/testcards/units";
 
-type NumberAbort = Extract<AbortLine, { kind: "number" }>;
 export type LimitRow = {
   key: string;
   layer: "normal" | "placard" | "card" | "abort";
@@ -76,7 +75,7 @@ export function limitRow(limit: Limit, instruments: Instrument[]): LimitRow {
 }
 
 /** A standing abort beside the limits it keeps; the true value is that of the number printed. */
-export function abortRow(line: NumberAbort, parameter: Parameter, instruments: Instrument[]): LimitRow {
+export function abortRow(line: AbortNumber, parameter: Parameter, instruments: Instrument[]): LimitRow {
   const own = instruments.find(({ id }) => id === line.instrument);
   const back = own?.calibration && !line.perMinute ? correctReading(line.onGauge, own.calibration) : null;
   const trueOfPrinted = own && back?.inRange ? convert(back.value, own.unit, parameter.unit) : null;

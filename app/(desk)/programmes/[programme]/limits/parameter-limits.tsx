@@ -6,11 +6,10 @@ import { formatNumber, formatUncertainty, ownDecimals } from "@/lib/format/numbe
 import { withUnit } from "@/lib/format/unit";
 import { sentenceCase } from "@/lib/format/words";
 import { correctReading } from "@/lib/testcards/calibration";
-import type { AbortLine, Instrument, Limit, Parameter } from "@/lib/testcards/card";
+import type { AbortLine, AbortNumber, Instrument, Limit, Parameter } from "@/lib/testcards/card";
 import { convert, sameDimension } from "@/lib/testcards/units";
 import { abortRow, type LimitRow, limitRow, normalRow } from "./limit-rows";
 
-type NumberAbort = Extract<AbortLine, { kind: "number" }>;
 const DRAWN_WHEN = new Set<Limit["appliesWhen"]>(["always", "at power", "full power"]);
 const figure = (value: number) => formatNumber(value, ownDecimals(value));
 
@@ -25,7 +24,7 @@ export function ParameterLimits({
   instruments: Instrument[];
   standingAborts: AbortLine[];
 }) {
-  const aborts = standingAborts.filter((line): line is NumberAbort => line.kind === "number" && line.parameter === parameter.code);
+  const aborts = standingAborts.filter((line): line is AbortNumber => line.kind === "number" && line.parameter === parameter.code);
   const rows = [
     ...normalRow(parameter, instruments),
     ...limits.map((limit) => limitRow(limit, instruments)),
@@ -86,7 +85,7 @@ function LimitLine({ row: { layer, words, trueText, onGauges, source } }: { row:
 }
 
 /** The layers that hold in running, on the parameter's own scale; moments of their own stand in the table only. */
-function stripOf(parameter: Parameter, limits: Limit[], aborts: NumberAbort[], instruments: Instrument[]): Strip {
+function stripOf(parameter: Parameter, limits: Limit[], aborts: AbortNumber[], instruments: Instrument[]): Strip {
   const drawn = limits.filter(
     (limit) => sameDimension(limit.unit, parameter.unit) && limit.forS === 0 && DRAWN_WHEN.has(limit.appliesWhen),
   );

@@ -1,17 +1,12 @@
 import type { Band, Quantity } from "@/lib/testcards/card";
-import { unitSymbol } from "@/lib/testcards/unit-symbols";
+import { unitSymbol, withUnit } from "@/lib/testcards/unit-symbols";
 import type { Unit } from "@/lib/testcards/units";
-import { decimalsOf, formatNumber, ownDecimals, THIN_SPACE } from "./number";
+import { decimalsOf, formatNumber, ownDecimals } from "./number";
 
 /** A unit as the trade prints it. */
 export const unitLabel = unitSymbol;
 
-/** Puts a unit behind a figure; an angle's degree sign stands close to it. */
-export function withUnit(figure: string, unit: Unit | null): string {
-  const label = unit === null ? "" : unitLabel(unit);
-  if (label === "") return figure;
-  return unit === "deg" ? `${figure}${label}` : `${figure}${THIN_SPACE}${label}`;
-}
+export { withUnit };
 
 export function formatQuantity(quantity: Quantity, decimals = ownDecimals(quantity.value)): string {
   return withUnit(formatNumber(quantity.value, decimals), quantity.unit);

@@ -80,9 +80,9 @@ function steadyNow(card: CardDocument, reading: Reading, entry: ReadingEntry | n
   const known = found.expandedUncertaintyPerMin;
   const half = STABILISED_PER_MIN / 2;
   if (Math.abs(found.perMin) >= STABILISED_PER_MIN)
-    return not(`changing ${signed(found.perMin)} of ${STABILISED_PER_MIN.toFixed(2)} °C/min`);
+    return not(`changing ${oneDecimal(found.perMin)} of ${STABILISED_PER_MIN.toFixed(2)} °C/min`);
   if (known >= half) return not(`slope known to ${known.toFixed(2)} of ${half.toFixed(3)} °C/min`);
-  return { reason: null, why: `${name} ${signed(found.perMin)} ±${known.toFixed(2)} °C/min` };
+  return { reason: null, why: `${name} ${oneDecimal(found.perMin)} ±${known.toFixed(2)} °C/min` };
 }
 
 /** The rows after the last gap too wide to be trusted. */
@@ -91,7 +91,8 @@ function sinceGap<T extends { timeS: number }>(series: T[]): T[] {
   return after < 0 ? series : series.slice(after);
 }
 
-function signed(value: number): string {
+/** One decimal with a real minus sign; nothing is minus nought. */
+export function oneDecimal(value: number): string {
   const text = Math.abs(value).toFixed(1);
   return value < 0 && Number(text) !== 0 ? `−${text}` : text;
 }

@@ -1,10 +1,11 @@
 /** What follows from the lines: what fell off its prediction, which squawks to raise, and what somebody must look at. */
 import { type CardDocument, type CardPoint, parameterOf } from "./card";
 import type { Subject } from "./check-as-flown";
+import { oneDecimal } from "./check-completion";
 import { correct, extremeOf } from "./check-gauge";
 import type { CheckContext, CheckLine, Debrief, PointDebrief, PointReport, SuggestedSquawk } from "./debrief-types";
 import type { Finding } from "./readiness-types";
-import { unitSymbol } from "./unit-symbols";
+import { withUnit } from "./unit-symbols";
 import type { Reason, Side } from "./words";
 
 const ROUNDING = 1e-9;
@@ -70,13 +71,10 @@ export function squawksOf(card: CardDocument, lines: readonly CheckLine[], debri
 function squawkText(card: CardDocument, { limit, asTrue, verdict, parameter, notes }: CheckLine): string {
   const name = parameterOf(card, parameter)?.name ?? parameter ?? "Reading";
   if (!limit) return name;
-  const unit = `\u202f${unitSymbol(limit.unit)}`.trimEnd();
-  const said = asTrue ? ` ${figure(asTrue.value)}${unit} as flown,` : "";
-  const against = `${limit.side} ${figure(limit.value)}${unit} (${limit.source})`;
+  const said = asTrue ? ` ${withUnit(oneDecimal(asTrue.value), limit.unit)} as flown,` : "";
+  const against = `${limit.side} ${withUnit(oneDecimal(limit.value), limit.unit)} (${limit.source})`;
   return `${name}:${said} ${verdict} against ${against}${notes.length > 0 ? `, ${notes.join(", ")}` : ""}`;
 }
-
-const figure = (value: number): string => `${value < 0 ? "−" : ""}${Math.abs(value).toFixed(1)}`;
 
 export function findingsOf(
   card: CardDocument,

@@ -19,3 +19,13 @@ const SYMBOLS: Partial<Record<Unit, string>> = {
 export function unitSymbol(unit: Unit): string {
   return SYMBOLS[unit] ?? unit;
 }
+
+/** U+202F: between a value and its unit, so that the two are never parted. */
+export const THIN_SPACE = "\u202f";
+
+/** Puts a unit behind a figure; an angle's degree sign stands close to it. */
+export function withUnit(text: string, unit: Unit | null): string {
+  const symbol = unit === null ? "" : unitSymbol(unit);
+  if (symbol === "") return text;
+  return unit === "deg" ? `${text}${symbol}` : `${text}${THIN_SPACE}${symbol}`;
+}

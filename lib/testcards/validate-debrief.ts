@@ -2,7 +2,7 @@
 import type { CardDocument } from "./card";
 import { COMMENT_LENGTH, debriefModel, TIMES_OF } from "./debrief";
 import type { Debrief, DebriefField, FieldError, PointDebrief, ReadingEntry } from "./debrief-types";
-import { unitSymbol } from "./unit-symbols";
+import { withUnit } from "./unit-symbols";
 import { convert, sameDimension, type Unit } from "./units";
 
 export type ValidateOptions = { complete?: boolean };
@@ -181,10 +181,9 @@ function rangeErrors(field: DebriefField, value: number, unit: Unit | null): Fie
 
 function rangeWords(low: number | null, high: number | null, unit: Unit | null): string {
   const sign = (value: number) => `${value < 0 ? "−" : ""}${Number(Math.abs(value).toFixed(2))}`;
-  const name = unit === null || unit === "1" ? "" : `\u202f${unitSymbol(unit)}`;
-  if (low === null) return `possible up to ${sign(high ?? 0)}${name}`;
-  if (high === null) return `possible from ${sign(low)}${name} upwards`;
-  return `possible are ${sign(low)} to ${sign(high)}${name}`;
+  if (low === null) return `possible up to ${withUnit(sign(high ?? 0), unit)}`;
+  if (high === null) return `possible from ${withUnit(sign(low), unit)} upwards`;
+  return `possible are ${sign(low)} to ${withUnit(sign(high), unit)}`;
 }
 
 function textErrors(key: string, text: string): FieldError[] {

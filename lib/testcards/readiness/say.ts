@@ -1,8 +1,9 @@
 import type { Quantity } from "../card";
-import { unitSymbol } from "../unit-symbols";
+import { withUnit } from "../unit-symbols";
 import type { Unit } from "../units";
 
-const THIN = "\u202f";
+export { withUnit };
+
 const MINUS = "−";
 
 function decimalsOf(step: number): number {
@@ -29,11 +30,6 @@ export function apart(value: number, from: number): string {
   }
   return figure(value, 6);
 }
-
-export const withUnit = (text: string, unit: Unit): string => {
-  const symbol = unitSymbol(unit);
-  return symbol === "" ? text : symbol === "°" ? `${text}°` : `${text}${THIN}${symbol}`;
-};
 
 export const amount = (value: number, unit: Unit, decimals = 2): string => withUnit(figure(value, decimals), unit);
 export const quantity = ({ value, unit }: Quantity): string => amount(value, unit);

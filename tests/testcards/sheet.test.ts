@@ -6,7 +6,8 @@ import { layOutSheet, sheetOverflow } from "@/lib/testcards/sheet";
 import { textWidthMm } from "@/lib/testcards/sheet-layout/typesetting";
 import type { SheetItem, SheetPage, SheetPaper } from "@/lib/testcards/sheet-types";
 import { CARD_STATES, type CardState } from "@/lib/testcards/words";
-import { abortEvent, abortNumber, BLANK_POINT, CHECK, CLIMB, SHUT, STAMP, sheetCard, sheetReading } from "./support/sheet-card";
+import { BLANK_POINT, CHECK, CLIMB, SHUT, STAMP, sheetCard, sheetReading } from "./support/sheet-card";
+import { abortEvent, abortNumber } from "./support/sheet-programme";
 
 const lay = (card: CardDocument, paper: SheetPaper = "a5", state: CardState = "released") =>
   layOutSheet(card, { paper, state, widths: B612_WIDTHS, stamp: STAMP });

@@ -12,6 +12,7 @@ import { SHEET_CAUTION } from "@/lib/testcards/words";
 import { getSortieResults, type SortieResults } from "@/lib/workflow/sortie/queries";
 import { orNotFound } from "../../../../../or-not-found";
 import { BinderPage } from "../../../binder-page";
+import { StepSection } from "./step-section";
 
 export const metadata = { title: "Results" };
 
@@ -88,6 +89,7 @@ export default async function ResultsPage({ params, searchParams }: Props) {
           />
         </Section>
       ) : null}
+      <StepSection results={results} programmeId={programme} roles={actor.roles} />
       <Section id="raw" title="As it was typed" lead="The pilot’s raw readings, locked when they were sent.">
         <RawDebrief debrief={debrief.content} documents={checks.map(({ card }) => card.document)} />
       </Section>

@@ -1,7 +1,9 @@
 /** The programme behind the ready cards: the invented Quillon R2's gauges, limits and standing aborts, every one in order. */
+
 import type { AbortLine, CalibrationRecord, Instrument, Limit, Parameter, ProgrammeSnapshot } from "@/lib/testcards/card";
 import type { Unit } from "@/lib/testcards/units";
 import type { HotDayRule, LimitCondition, LimitStatistic, Side } from "@/lib/testcards/words";
+import { cowl, quillon } from "./quillon";
 
 type Table = [read: number, actual: number][];
 const truly = (...reads: number[]): Table => reads.map((read) => [read, read]);
@@ -204,48 +206,8 @@ export const PROGRAMME: ProgrammeSnapshot = {
   notice: "Invented limits, for no real aircraft.",
   hotDayBasis: "metric",
   airfield: { name: "Harrow Fen", elevationFt: 350 },
-  aircraft: {
-    registration: "Q-R2-01",
-    type: "Quillon R2",
-    engine: "HF-4L",
-    maxMassKg: 600,
-    emptyMassKg: 381,
-    emptyArmM: 1.895,
-    envelope: [
-      { massKg: 380, cgM: 1.9 },
-      { massKg: 500, cgM: 1.9 },
-      { massKg: 600, cgM: 1.96 },
-      { massKg: 600, cgM: 2.06 },
-      { massKg: 380, cgM: 2.06 },
-    ],
-    stations: [
-      { name: "Left seat", armM: 2.15, maxKg: 110 },
-      { name: "Right seat", armM: 2.15, maxKg: 110 },
-      { name: "Baggage", armM: 2.8, maxKg: 15 },
-    ],
-    fuelArmM: 2.23,
-    fuelDensityKgPerL: 0.72,
-    fuelCapacityL: 90,
-    fuelUnusableL: 4,
-    speeds: [
-      { code: "V_FE", name: "wing flap out", valueKt: 80, airspeed: "KIAS" },
-      { code: "V_NO", name: "smooth air above", valueKt: 115, airspeed: "KIAS" },
-      { code: "V_NE", name: "never exceed", valueKt: 138, airspeed: "KIAS" },
-    ],
-    criticalAltitudeFt: 9000,
-  },
-  controls: [
-    {
-      name: "COWL",
-      positions: [
-        { name: "SHUT", groundOnly: false, maxSpeedKt: null, restricted: true },
-        { name: "TRAIL", groundOnly: false, maxSpeedKt: null, restricted: false },
-        { name: "OPEN", groundOnly: false, maxSpeedKt: 105, restricted: false },
-        { name: "REMOVED", groundOnly: true, maxSpeedKt: null, restricted: false },
-      ],
-      recoverTo: "OPEN",
-    },
-  ],
+  aircraft: quillon(),
+  controls: [cowl()],
   coolDown: { durationS: 180, text: "3 min at 1000 rpm" },
   callWords: [
     { word: "terminate", meaning: "stop the point, not a safety matter" },

@@ -2,6 +2,7 @@
  * The invented Quillon R2 with its HF-4L engine as one real card document: gauges, limits and standing abort lines in full,
  * points cut down to what a check needs. Every figure is the demo programme's own.
  */
+
 import {
   type AbortLine,
   assembleCard,
@@ -17,6 +18,7 @@ import {
 } from "@/lib/testcards/card";
 import type { Unit } from "@/lib/testcards/units";
 import type { LimitCondition, Sampling, Side } from "@/lib/testcards/words";
+import { cowl, quillon } from "./quillon";
 
 type Table = [read: number, actual: number][];
 
@@ -210,43 +212,14 @@ export function sampleProgramme(over: Partial<ProgrammeSnapshot> = {}): Programm
     notice: "Invented limits, for no real aircraft.",
     hotDayBasis: "metric",
     airfield: { name: "Harrow Fen", elevationFt: 350 },
-    aircraft: {
-      registration: "Q-R2-01",
-      type: "Quillon R2",
-      engine: "HF-4L",
-      maxMassKg: 600,
-      emptyMassKg: 381,
-      emptyArmM: 1.895,
-      envelope: [
-        { massKg: 380, cgM: 1.9 },
-        { massKg: 500, cgM: 1.9 },
-        { massKg: 600, cgM: 1.96 },
-        { massKg: 600, cgM: 2.06 },
-        { massKg: 380, cgM: 2.06 },
-      ],
+    aircraft: quillon({
       stations: [
         { name: "Seats", armM: 2.15, maxKg: 220 },
         { name: "Baggage", armM: 2.8, maxKg: 15 },
       ],
-      fuelArmM: 2.23,
-      fuelDensityKgPerL: 0.72,
-      fuelCapacityL: 90,
-      fuelUnusableL: 4,
       speeds: [{ code: "V_NE", name: "never exceed", valueKt: 138, airspeed: "KIAS" }],
-      criticalAltitudeFt: 9000,
-    },
-    controls: [
-      {
-        name: "COWL",
-        positions: [
-          { name: "SHUT", groundOnly: false, maxSpeedKt: null, restricted: true },
-          { name: "TRAIL", groundOnly: false, maxSpeedKt: null, restricted: false },
-          { name: "OPEN", groundOnly: false, maxSpeedKt: 105, restricted: false },
-          { name: "REMOVED", groundOnly: true, maxSpeedKt: null, restricted: false },
-        ],
-        recoverTo: "OPEN",
-      },
-    ],
+    }),
+    controls: [cowl()],
     coolDown: { durationS: 180, text: "1000 rpm 3 min turbine cool-down" },
     callWords: [{ word: "abort", meaning: "stop now, make safe" }],
     goNoGo: ["wind 15 kt or less"],

@@ -1,6 +1,7 @@
 import type { AbortLine, Instrument, Limit, Parameter, ProgrammeSnapshot } from "@/lib/testcards/card";
 import type { Unit } from "@/lib/testcards/units";
 import type { LimitCondition, Side } from "@/lib/testcards/words";
+import { cowl, quillon } from "./quillon";
 
 /** An invented aircraft and engine, for tests of the sheet. */
 
@@ -177,43 +178,8 @@ export const sheetProgramme = (): ProgrammeSnapshot => ({
   notice: "Invented limits, for no real aircraft.",
   hotDayBasis: "metric",
   airfield: { name: "Harrow Fen", elevationFt: 350 },
-  aircraft: {
-    registration: "Q-R2-01",
-    type: "Quillon R2",
-    engine: "HF-4L",
-    maxMassKg: 600,
-    emptyMassKg: 381,
-    emptyArmM: 1.895,
-    envelope: [
-      { massKg: 380, cgM: 1.9 },
-      { massKg: 500, cgM: 1.9 },
-      { massKg: 600, cgM: 1.96 },
-      { massKg: 600, cgM: 2.06 },
-      { massKg: 380, cgM: 2.06 },
-    ],
-    stations: [
-      { name: "Left seat", armM: 2.15, maxKg: 110 },
-      { name: "Right seat", armM: 2.15, maxKg: 110 },
-      { name: "Baggage", armM: 2.8, maxKg: 15 },
-    ],
-    fuelArmM: 2.23,
-    fuelDensityKgPerL: 0.72,
-    fuelCapacityL: 90,
-    fuelUnusableL: 4,
-    speeds: [],
-    criticalAltitudeFt: 9000,
-  },
-  controls: [
-    {
-      name: "COWL",
-      recoverTo: "OPEN",
-      positions: [
-        { name: "SHUT", groundOnly: false, maxSpeedKt: null, restricted: true },
-        { name: "TRAIL", groundOnly: false, maxSpeedKt: null, restricted: false },
-        { name: "OPEN", groundOnly: false, maxSpeedKt: 105, restricted: false },
-      ],
-    },
-  ],
+  aircraft: quillon({ speeds: [] }),
+  controls: [cowl()],
   coolDown: { durationS: 180, text: "1000 rpm 3 min" },
   callWords: [
     { word: "terminate", meaning: "stop the point, not a safety matter" },

@@ -15,10 +15,11 @@ type WorkspaceProps = {
   findings: Finding[];
   carried: string | null; // title of what is being dragged
   readOnly?: boolean;
+  code?: boolean[][] | null; // the released sheet's, as it prints
 };
 
 /** The card as it will print, page under page, with its points as things to pick up and put down. */
-export function SheetWorkspace({ pages, points, selected, onSelect, findings, carried, readOnly = false }: WorkspaceProps) {
+export function SheetWorkspace({ pages, points, selected, onSelect, findings, carried, readOnly = false, code = null }: WorkspaceProps) {
   const slots = readOnly
     ? []
     : dropSlots(
@@ -29,7 +30,9 @@ export function SheetWorkspace({ pages, points, selected, onSelect, findings, ca
     <div className="mx-auto flex w-full max-w-[600px] flex-col gap-8">
       {pages.map((page) => (
         <section key={page.number} aria-label={`Page ${page.number} of ${page.of}`} className="relative bg-sheet shadow-sheet">
-          <SheetPageView page={page} />
+          <div className="paper">
+            <SheetPageView page={page} code={code} />
+          </div>
           {page.regions.map((region) => {
             const index = points.findIndex(({ id }) => id === region.point);
             const point = points[index];

@@ -29,12 +29,13 @@ export type CardRecordView = {
   findings: Finding[];
   comments: Remark[];
   stamp: SheetStamp | null;
+  code: boolean[][] | null;
   may: Record<"edit" | "submit" | "comment" | "return" | "release" | "withdraw" | "revise" | "print", boolean>;
 };
 
 /** A revision that is not being written: the sheet as it prints, what was found, what was said, and what may be done. */
 export function CardRecord({ view }: { view: CardRecordView }) {
-  const { card, revision, document, digest, findings, comments, stamp, may } = view;
+  const { card, revision, document, digest, findings, comments, stamp, code, may } = view;
   const [selected, setSelected] = useState<string | null>(null);
   const pages = useMemo(
     () => layOutSheet(document, { paper: "a5", state: revision.state, widths: B612_WIDTHS, stamp }),
@@ -55,6 +56,7 @@ export function CardRecord({ view }: { view: CardRecordView }) {
           onSelect={setSelected}
           findings={frozen ? [] : findings}
           carried={null}
+          code={code}
           readOnly
         />
       </div>

@@ -1,15 +1,15 @@
 import { join } from "node:path";
 import { renderToBuffer } from "@react-pdf/renderer";
-import { create } from "qrcode";
 import { createElement } from "react";
 import { projectFolder } from "@/lib/pdf/project-folder";
 import { KneeboardDocument } from "./document";
 import type { KneeboardModel } from "./model";
 import type { CodeModules } from "./paint-page";
+import { codeMatrix } from "./sheet-code";
 
 function modulesOf(url: string): CodeModules {
-  const { modules } = create(url, { errorCorrectionLevel: "L" });
-  return { size: modules.size, dark: (row, column) => modules.get(row, column) === 1 };
+  const matrix = codeMatrix(url);
+  return { size: matrix.length, dark: (row, column) => matrix[row]?.[column] === true };
 }
 
 /** Draws a laid-out sheet as a PDF with the typeface embedded. No clock and no network. */

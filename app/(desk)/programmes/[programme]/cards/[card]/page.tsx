@@ -4,6 +4,8 @@ import { CardBuilder } from "@/components/builder/card-builder";
 import { CardRecord, type CardRecordView } from "@/components/card/card-record";
 import { CardState } from "@/components/card/card-state";
 import { requestCtx } from "@/lib/auth/request-ctx";
+import { env } from "@/lib/env";
+import { codeMatrix, sheetCodeUrl } from "@/lib/pdf/kneeboard/sheet-code";
 import { type CardView, getCardRevision } from "@/lib/workflow/card/queries";
 import { listTestPoints } from "@/lib/workflow/programme/queries";
 import { orNotFound } from "../../../../or-not-found";
@@ -32,6 +34,7 @@ function toRecord({ card, revision, document, digest, findings, comments, stamp,
     findings,
     comments,
     stamp,
+    code: stamp ? codeMatrix(sheetCodeUrl(env().NEXTAUTH_URL ?? "", stamp.code)) : null,
     may,
   };
 }

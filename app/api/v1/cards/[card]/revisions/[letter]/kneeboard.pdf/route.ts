@@ -3,6 +3,7 @@ import { env } from "@/lib/env";
 import { HttpRefusal } from "@/lib/http/http-refusal";
 import { respond } from "@/lib/http/respond";
 import { kneeboardCacheKey } from "@/lib/pdf/kneeboard/model";
+import { sheetCodeUrl } from "@/lib/pdf/kneeboard/sheet-code";
 import { RenderFailed, renderKneeboardOffThread } from "@/lib/pdf/render-worker/render-off-thread";
 import { keptSheet } from "@/lib/storage/sheet-files";
 import { B612_WIDTHS } from "@/lib/testcards/b612-widths";
@@ -37,7 +38,7 @@ export function GET(request: Request, { params }: Context) {
 
 /** Drawn once for one document, state, paper and address of the scan page. */
 async function drawnSheet({ card, state, digest, document, stamp, updatedAt }: Source, paper: Paper): Promise<Uint8Array> {
-  const codeUrl = stamp ? `${env().NEXTAUTH_URL ?? ""}/c/${stamp.code}` : null;
+  const codeUrl = stamp ? sheetCodeUrl(env().NEXTAUTH_URL ?? "", stamp.code) : null;
   const { aircraft } = document.programme;
   const key = `${kneeboardCacheKey({ digest, state, paper })}.${digestOf(codeUrl).slice(0, 8)}`;
   try {

@@ -1,7 +1,7 @@
 /** Comparison (ii): what was true in flight against the card limit and against the placard. */
 import { rateUncertainty } from "./calibration";
 import { type CardDocument, type CardPoint, parameterOf, type Reading } from "./card";
-import { type Corrected, correct, extremeOf, type Gauge, type Raw, rawRows, speaksFor, trueSeries } from "./check-gauge";
+import { type Corrected, correct, extremeOf, type Gauge, gaugeOf, type Raw, rawRows, speaksFor, trueSeries } from "./check-gauge";
 import { type AppliedLimit, clock, limitOnLine } from "./check-limits";
 import type { CheckContext, CheckLine, Debrief, PointDebrief, ReadingEntry } from "./debrief-types";
 
@@ -162,30 +162,37 @@ function swingFigure(subject: Subject, limit: AppliedLimit): Figure {
   return derived(subject, limit, peakToPeak(series, { windowS }), pairUncertainty(subject, limit), `peak to peak over ${clock(windowS)}`);
 }
 
-/** Highest less lowest of the group: readings of the same parameter or group, or the rows of one reading. Said once, on its first reading. */
+/**
+ * Highest less lowest of the group: readings of the same parameter or group, each by its own gauge, or the rows of one reading. Said once,
+ * on its first reading. A value that its gauge cannot vouch for leaves the spread without a reading.
+ */
 function spreadFigure(subject: Subject, limit: AppliedLimit): Figure | null {
-  const { card, point, reading, said, entry, gauge } = subject;
+  const { card, point, reading, said, entry, gauge, context } = subject;
   const group = parameterOf(card, reading.parameter)?.group ?? null;
+  const alike = (other: Reading) =>
+    other.parameter === reading.parameter || (group !== null && parameterOf(card, other.parameter)?.group === group);
   const members = point.readings.filter(
-    (other) => other.parameter === reading.parameter || (group !== null && parameterOf(card, other.parameter)?.group === group),
+    (other) =>
+      other.id === reading.id || (reading.parameter !== null && (other.kind === "number" || other.kind === "count") && alike(other)),
   );
   if (members[0]?.id !== reading.id) return null;
-  const turn = (value: number, from: Unit) => (sameDimension(from, limit.unit) ? convert(value, from, limit.unit) : null);
-  const one = members.length === 1 && entry ? rawRows(entry).map(({ value }) => correct(value, gauge, limit.unit)?.value ?? null) : null;
-  const values =
-    one ??
-    members.map((member) => {
-      const theirs = said?.readings.find((candidate) => candidate.reading === member.id) ?? null;
-      const raw = extremeOf(member, theirs, "max");
-      if (raw === null) return null;
-      return member.instrument === reading.instrument
-        ? (correct(raw.value, gauge, limit.unit)?.value ?? null)
-        : turn(raw.value, member.unit ?? gauge.unit);
-    });
-  const known = values.filter((value) => value !== null);
+  const rows = members.length === 1 && reading.sampling === "series" && entry ? rawRows(entry) : null;
+  const values = rows
+    ? rows.map((row) => correct(row.value, gauge, limit.unit, null, reading.kind === "count"))
+    : members.map((member) => {
+        const theirs = said?.readings.find((candidate) => candidate.reading === member.id) ?? null;
+        const raw = extremeOf(member, theirs, "max");
+        return raw && correct(raw.value, gaugeOf(card, member, theirs, context), limit.unit, null, member.kind === "count");
+      });
+  const known = values.filter((value) => value !== null && value.beyond === null) as Corrected[];
   if (known.length < 2 || known.length < values.length)
     return missing(`${known.length} of ${Math.max(values.length, 2)} readings of the spread`);
-  return derived(subject, limit, Math.max(...known) - Math.min(...known), pairUncertainty(subject, limit), `spread of ${known.length}`);
+  const spread = Math.max(...known.map(({ value }) => value)) - Math.min(...known.map(({ value }) => value));
+  const us = known.map(({ expandedUncertainty }) => expandedUncertainty);
+  const u = us.every((one) => one !== null) ? Math.SQRT2 * Math.max(...us) : null;
+  const reasons = known.flatMap((one) => one.reasons);
+  const figure = derived(subject, limit, spread, u, `spread of ${known.length}`);
+  return { ...figure, reasons: [...new Set([...figure.reasons, ...reasons])] };
 }
 
 /** After less before, where both are rows of one reading; otherwise the caller must know the baseline. */

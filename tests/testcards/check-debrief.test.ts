@@ -260,6 +260,18 @@ describe("a point's own limit", () => {
     expect(tank({ value: 3 }, 3, "count")).toMatchObject({ verdict: "within", margin: 0 });
   });
 
+  // A reading of what was held 30 s can show that 12 was passed for 30 s: 13 is past it, 11.5 is within 1 of it.
+  test.each([
+    [13, "exceeded", "held 0:30 or more"],
+    [11.5, "marginal", ""],
+    [10, "within", ""],
+  ])("judges a sustained limit on the value that was held: %d mm/s is %s", (value, verdict, why) => {
+    const held = sampleReading("oat", "highest", { id: "held", parameter: null, instrument: null, unit: "mm/s" });
+    const own = ownLimit("held", { unit: "mm/s", value: 12, forS: 30, statistic: "sustained", expandedUncertainty: 1 });
+    const line = lineOf(run([held], { held: { value } }, { point: { limits: [own] } }), "held", "as flown, card");
+    expect(line).toMatchObject({ verdict, why });
+  });
+
   test("holds the spread of a row of cylinders: 78 − 58 = 20 against 8", () => {
     const held = sampleReading("oat", "series", { id: "held", parameter: null, instrument: null, unit: "psi" });
     const rows = [77, 78, 58, 76].map((value, i) => ({ atS: null, label: `Cyl ${i + 1}`, value }));

@@ -49,6 +49,29 @@ describe("the air of the hottest moment", () => {
     expect(own.hotDay?.ambient.value).toBeCloseTo(31, 9);
   });
 
+  // Rows 90, 92.5 on the gauge in level flight: 93.06 true. At 3000 ft metric: 38 − 5.94 = 32.06; less 12 is 20.06: 113.1.
+  test("of rows flown is what was given for where they are highest", () => {
+    const series = sampleReading("coolant", "series");
+    const level = { place: "air" as const };
+    const typed = { rows: minuteRows([90, 92.5], 10), altitudeFt: 3000, oat: 12 };
+    const line = hot([series], { coolant: typed }, { point: level });
+    expect(line.hotDay?.pressureAltitudeFt).toBe(3000);
+    expect(digit(line.hotDay?.value)).toBe("113.1");
+    expect(hot([series], { coolant: { rows: typed.rows } }, { point: level })).toMatchObject({
+      verdict: "no verdict",
+      reasons: ["no reading"],
+      why: "no outside air temperature at that moment",
+    });
+  });
+
+  test("is refused where no air is so cold, on a table or without one", () => {
+    const cold = { ...withOat, coolant: { value: 92.5, oat: -400 } };
+    expect(hot([coolant, oat], cold)).toMatchObject({ verdict: "no verdict", reasons: ["no reading"], hotDay: null });
+    const bare = { instruments: sampleProgramme().instruments.filter(({ parameter }) => parameter !== "oat") };
+    const line = hot([coolant], { coolant: { value: 92.5, oat: -400 } }, { programme: bare });
+    expect(line).toMatchObject({ verdict: "no verdict", reasons: ["no reading"], why: "the outside air temperature cannot be right" });
+  });
+
   test("is asked for: no QNH, no outside air, no hot-day basis", () => {
     const noQnh = hot([coolant, oat], withOat, { context: { stationPressureAltitudeFt: null } });
     expect(noQnh).toMatchObject({

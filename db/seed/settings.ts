@@ -5,7 +5,8 @@ import { abortAt, abortIf } from "./test-points/build";
 export const NOTICE = "Limits invented for this demonstration: for no real aircraft.";
 
 export const PROGRAMME_NAME = "Quillon R2, belly radiator and COWL";
-export const PROGRAMME_SUMMARY = "New lower cowl with a ducted belly radiator and a pilot-operated exit, COWL. Does the engine stay inside its limits on the ground, in the air and on the hot day?";
+export const PROGRAMME_SUMMARY =
+  "New lower cowl with a ducted belly radiator and a pilot-operated exit, COWL. Does the engine stay inside its limits on the ground, in the air and on the hot day?";
 
 export const SETTINGS: ProgrammeSettings = {
   notice: NOTICE,

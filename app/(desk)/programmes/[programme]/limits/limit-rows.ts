@@ -1,6 +1,6 @@
 import { formatNumber, ownDecimals } from "@/lib/format/number";
 import { formatOnGauge, formatQuantity, withUnit } from "@/lib/format/unit";
-import { correctReading, readingFor } from "@/lib/testcards/calibration";
+import { correctReading } from "@/lib/testcards/calibration";
 import type { AbortNumber, Instrument, Limit, Parameter } from "@/lib/testcards/card";
 import { bandOnGauge, differenceOnGauge, onGauge } from "@/lib/testcards/sheet-layout/gauge-figures";
 import { convert, rateUnitOf, sameDimension } from "@/lib/testcards/units";
@@ -14,22 +14,16 @@ export type LimitRow = {
   source: string;
 };
 
-const NOT_PROVED = "outside its calibrated range";
 const figure = (value: number) => formatNumber(value, ownDecimals(value));
 
+/** What prints, or why nothing may: a gauge says nothing outside the range in which it was proved. */
 function gaugeText(limit: Limit, instrument: Instrument): string {
   if (!sameDimension(limit.unit, instrument.unit)) {
     const change = differenceOnGauge(limit.value, limit.unit, limit.side, instrument);
-    return withUnit(figure(change), rateUnitOf(instrument.unit) ?? instrument.unit);
+    return typeof change === "string" ? change : withUnit(figure(change), rateUnitOf(instrument.unit) ?? instrument.unit);
   }
-  return provedText(limit.value, limit, instrument);
-}
-
-/** What prints, or why nothing may: a gauge says nothing outside the range in which it was proved. */
-function provedText(value: number, { unit, side }: Pick<Limit, "unit" | "side">, instrument: Instrument): string {
-  if (!instrument.calibration) return "not calibrated";
-  const { inRange } = readingFor(convert(value, unit, instrument.unit), instrument.calibration);
-  return inRange ? formatOnGauge(onGauge(value, unit, side, instrument), instrument) : NOT_PROVED;
+  const shown = onGauge(limit.value, limit.unit, limit.side, instrument);
+  return typeof shown === "string" ? shown : formatOnGauge(shown, instrument);
 }
 
 export function normalRow(parameter: Parameter, instruments: Instrument[]): LimitRow[] {
@@ -43,8 +37,8 @@ export function normalRow(parameter: Parameter, instruments: Instrument[]): Limi
       words: "normal range",
       trueText: withUnit(ends(normal.low, normal.high), normal.unit),
       onGauges: instruments.map((instrument) => {
-        const { low, high } = bandOnGauge(normal, instrument);
-        return withUnit(ends(low, high), instrument.unit);
+        const band = bandOnGauge(normal, instrument);
+        return typeof band === "string" ? band : withUnit(ends(band.low, band.high), instrument.unit);
       }),
       source: "",
     },

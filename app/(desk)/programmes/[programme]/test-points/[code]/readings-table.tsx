@@ -47,7 +47,8 @@ export function ReadingsTable({ point, programme }: { point: CardPoint; programm
 
 function expectedOnGauge(reading: Reading, instrument: Instrument | undefined): string {
   if (!reading.expected || !instrument) return "—";
-  const { low, high } = bandOnGauge(reading.expected, instrument);
-  const ends = [low, high].filter((end): end is number => end !== null).map((end) => figure(end, instrument.unit));
+  const band = bandOnGauge(reading.expected, instrument);
+  if (typeof band === "string") return band;
+  const ends = [band.low, band.high].filter((end): end is number => end !== null).map((end) => figure(end, instrument.unit));
   return withUnit(ends.join(" to "), instrument.unit);
 }

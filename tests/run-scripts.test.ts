@@ -115,5 +115,5 @@ add("pilot@harrowfen.example", await hashPassword("changed since then"));`,
     const { code, said } = await check({ ...sound, DATABASE_FILE });
     expect(said).toMatch(/^DATABASE_FILE: .*demo accounts.*\(engineer@harrowfen\.example\)/);
     expect(code).toBe(1);
-  });
+  }, 60_000); // two processes, one after the other, and two slow hashes
 });

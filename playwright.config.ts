@@ -27,6 +27,7 @@ export default defineConfig({
     viewport: { width: 1440, height: 900 },
     timezoneId: "UTC",
     locale: "en-GB",
+    actionTimeout: 20_000,
     screenshot: "only-on-failure",
     trace: "off",
     launchOptions: { executablePath: process.env.CHROMIUM_PATH || undefined, args: [...sandbox, ...quiet] },

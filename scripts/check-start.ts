@@ -15,9 +15,15 @@ async function findProblems(): Promise<string[]> {
   if (!env.NEXTAUTH_URL) found.push("NEXTAUTH_URL: not set. It is the address people open, such as https://greenarc.example");
   if (env.GREENARC_DEMO)
     found.push("GREENARC_DEMO: is 1, which shows the demo sign-ins to everybody. Take it out; for a demo run: npm run demo");
+  if (env.DEMO_DATE)
+    found.push("DEMO_DATE: is set, which fixes the day that calibrations and releases are judged on. Take it out; it is for tests.");
   if (found.length > 0) return found;
 
-  migrateDb(env.DATABASE_FILE);
+  try {
+    migrateDb(env.DATABASE_FILE);
+  } catch (error) {
+    return [`DATABASE_FILE: ${env.DATABASE_FILE} cannot be used. ${error instanceof Error ? error.message : String(error)}`];
+  }
   const open = await demoAccountsIn(env.DATABASE_FILE, [demoPassword, ...(env.DEMO_PASSWORD ? [env.DEMO_PASSWORD] : [])]);
   if (open.length > 0)
     found.push(

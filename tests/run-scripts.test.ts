@@ -57,7 +57,7 @@ function run(args: string[], settings: Record<string, string | undefined>): Prom
 describe("each of these ends with one clear line and exit 1", () => {
   test.each(["demo", "dev", "start", "test", "build", "setup"])("%s under an old Node", async (script) => {
     const { code, said } = await run(["--require", join(folder, "old-node.cjs"), `scripts/${script}.mjs`], {});
-    expect(said).toBe("Greenarc needs Node 20 (20.9 or later); this is Node 18.20.4. Install it, for example with: nvm install 20");
+    expect(said).toBe("Greenarc needs Node 20 (20.19 or later); this is Node 18.20.4. Install it, for example with: nvm install 20");
     expect(code).toBe(1);
   });
 

@@ -17,7 +17,7 @@ const store = () => {
   return opened;
 };
 
-/** Keyed by person too: whoever else takes this phone never sees it. */
+/** Keyed by person too: whoever else signs in on this phone does not see it. */
 const draftKey = (person: string, sortie: string) => `draft/${person}/${sortie}`;
 const packKey = (sortie: string) => `pack/${sortie}`;
 

@@ -1,8 +1,9 @@
 import type { Metadata } from "next";
-import { publicDb } from "@/lib/auth/public-ctx";
+import { headers } from "next/headers";
+import { TooManyTries } from "@/lib/auth/errors";
 import { sentenceCase } from "@/lib/format/words";
 import { SCAN_CAUTION, type SheetStanding } from "@/lib/testcards/words";
-import { findSheet } from "@/lib/workflow/card/queries";
+import { findCountedSheet } from "./counted-sheet";
 
 export const metadata: Metadata = { title: "Printed sheet", robots: { index: false } };
 
@@ -20,12 +21,18 @@ const MEANING: Record<SheetStanding, string> = {
 
 /** What the code on a printed sheet leads to: one answer, and nothing else of the team's. */
 export default async function SheetPage({ params }: { params: Promise<{ code: string }> }) {
-  const { code } = await params;
-  const { standing } = findSheet(publicDb(), decodeURIComponent(code));
+  const code = readable((await params).code);
+  let standing: SheetStanding;
+  try {
+    standing = (await findCountedSheet(code, (await headers()).get("x-forwarded-for"))).standing;
+  } catch (error) {
+    if (error instanceof TooManyTries) return <p className="mx-auto w-full max-w-xl px-4 py-10 text-lg">{error.message}</p>;
+    throw error;
+  }
   return (
     <div className="mx-auto w-full max-w-xl px-4 py-10">
       <div className={`border-4 bg-sheet p-6 ${EDGE[standing]}`}>
-        <p className="break-all font-mono text-ink-soft">{decodeURIComponent(code).slice(0, 40)}</p>
+        <p className="break-all font-mono text-ink-soft">{code.slice(0, 40)}</p>
         <h1 className="flex items-start gap-3 pt-3 font-bold text-2xl">
           <StandingGlyph standing={standing} />
           {sentenceCase(standing)}
@@ -35,6 +42,15 @@ export default async function SheetPage({ params }: { params: Promise<{ code: st
       </div>
     </div>
   );
+}
+
+/** A code in the address may be escaped wrongly by whoever typed it: then it is shown as it came. */
+function readable(code: string): string {
+  try {
+    return decodeURIComponent(code);
+  } catch {
+    return code;
+  }
 }
 
 /** A tick, a cross, a question: the answer without colour. */

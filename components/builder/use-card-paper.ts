@@ -5,7 +5,7 @@ import { assembleCard, type CardContent, type CardIdentity, type ProgrammeSnapsh
 import { planCard } from "@/lib/testcards/card-plan";
 import { reviewCard } from "@/lib/testcards/readiness";
 import type { CardContext } from "@/lib/testcards/readiness-types";
-import { layOutSheet, sheetOverflow } from "@/lib/testcards/sheet";
+import { measuredSheet } from "@/lib/testcards/sheet";
 import type { CardState } from "@/lib/testcards/words";
 
 type PaperInput = {
@@ -21,10 +21,9 @@ export function useCardPaper({ programme, identity, content, context, state }: P
   const settled = useDeferredValue(content);
   return useMemo(() => {
     const card = assembleCard(programme, identity, settled);
-    const pages = layOutSheet(card, { paper: "a5", state, widths: B612_WIDTHS });
-    const overflow = sheetOverflow(card, B612_WIDTHS);
-    const findings = reviewCard(card, { ...context, widths: B612_WIDTHS, digest: null, releasedDigest: null }, { pages, overflow });
-    return { card, pages, findings, facts: factsOf(card, pages.length) };
+    const sheet = measuredSheet(card, { paper: "a5", state, widths: B612_WIDTHS });
+    const findings = reviewCard(card, { ...context, widths: B612_WIDTHS, digest: null, releasedDigest: null }, sheet);
+    return { card, pages: sheet.pages, findings, facts: factsOf(card, sheet.pages.length) };
   }, [programme, identity, settled, context, state]);
 }
 

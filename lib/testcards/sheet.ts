@@ -1,32 +1,48 @@
 import type { CardDocument } from "./card";
 import { inkCoverHead, planCover } from "./sheet-layout/cover";
-import { footerHeightMm, inkFooter, inkHeader, inkWatermark, type Place, stateWord } from "./sheet-layout/page-frame";
-import { BLOCK_GAP_MM, headerHeightMm, type PagePlan, planPages, type Sheet, sheetOf } from "./sheet-layout/paginate";
+import { inkFooter, inkHeader, inkWatermark, type Place, stateWord } from "./sheet-layout/page-frame";
+import { BLOCK_GAP_MM, type PagePlan, planPages, type Sheet, sheetOf } from "./sheet-layout/paginate";
 import { MOST_CELLS, PAPERS } from "./sheet-layout/paper";
 import { gridColumns } from "./sheet-layout/point-cells";
-import { type Ink, shifted, unprintableLetters } from "./sheet-layout/typesetting";
+import { type Ink, moved, shifted, unprintableLetters } from "./sheet-layout/typesetting";
 import type { FontWidths, SheetOverflow, SheetPage, SheetPaper, SheetRegion, SheetStamp } from "./sheet-types";
 import type { CardState } from "./words";
 
 /** Part of every cache key of a drawn sheet: raise it whenever the same card would be drawn otherwise. */
-export const SHEET_LAYOUT_VERSION = "1";
+export const SHEET_LAYOUT_VERSION = "2";
 
 export type SheetOptions = { paper: SheetPaper; state: CardState; widths: FontWidths; stamp?: SheetStamp | null };
+
+/** The pages of a sheet, and what cannot be laid out on them. */
+export type MeasuredSheet = { pages: SheetPage[]; overflow: SheetOverflow[] };
 
 /**
  * Lays a card out as pages of drawn items, in millimetres from the top left of the paper: the cover, then the points. Screen and PDF
  * draw exactly these. Nothing is cut off and nothing is set below its least size; see sheetOverflow for what then does not fit.
  */
-export function layOutSheet(card: CardDocument, { paper, state, widths, stamp = null }: SheetOptions): SheetPage[] {
+export function layOutSheet(card: CardDocument, options: SheetOptions): SheetPage[] {
+  return measuredSheet(card, options).pages;
+}
+
+/** The pages and what does not fit on them from one laying out, for whoever wants both at every change. */
+export function measuredSheet(card: CardDocument, { paper, state, widths, stamp = null }: SheetOptions): MeasuredSheet {
   const sheet = sheetOf(card, paper, stamp, widths);
-  const { pages } = planPages(sheet);
+  const { pages, trouble } = planPages(sheet);
   const startsOn = (covers: number) =>
     new Map(pages.flatMap((page, i) => page.parts.filter((p) => p.part === 1).map((p) => [p.point.id, covers + i + 1] as const)));
   let cover = planCover(sheet, startsOn(1));
   if (cover.pages.length > 1) cover = planCover(sheet, startsOn(cover.pages.length));
   const of = cover.pages.length + pages.length;
   const covers = cover.pages.map((page, i) => coverPage(sheet, state, page, cover.roomMm, { number: i + 1, of }, pages.length > 0));
-  return [...covers, ...pages.map((plan, i) => pointPage(sheet, state, plan, { number: covers.length + i + 1, of }))];
+  return {
+    pages: [...covers, ...pages.map((plan, i) => pointPage(sheet, state, plan, { number: covers.length + i + 1, of }))],
+    overflow: [
+      ...coverTrouble(cover.overMm),
+      ...trouble.map(({ point, page, message }) => ({ point, page: page + covers.length - 1, message })),
+      ...tooManyCells(card, startsOn(covers.length)),
+      ...unprintable(card, widths),
+    ],
+  };
 }
 
 function paperOf({ paper }: Sheet): { widthMm: number; heightMm: number } {
@@ -42,12 +58,11 @@ function coverPage(
   place: Place,
   more: boolean,
 ): SheetPage {
-  const { card, stamp, frame, widths } = sheet;
+  const { card, stamp, frame, widths, footerMm: heightMm } = sheet;
   const items: Ink = [];
   inkWatermark(items, stateWord(state), frame, widths);
   inkCoverHead(items, sheet, stateWord(state), place);
   items.push(...page.ink);
-  const heightMm = footerHeightMm(card, stamp, frame, widths);
   inkFooter(
     items,
     { card, stamp, place, note: more ? `limits, aborts and points: page ${place.number + 1}` : "", frame, heightMm },
@@ -57,16 +72,16 @@ function coverPage(
 }
 
 function pointPage(sheet: Sheet, state: CardState, plan: PagePlan, place: Place): SheetPage {
-  const { card, stamp, frame, widths } = sheet;
+  const { card, stamp, frame, widths, footerMm: heightMm } = sheet;
   const items: Ink = [];
   inkWatermark(items, stateWord(state), frame, widths);
   inkHeader(items, card, stateWord(state), place, frame, widths);
-  let y = frame.topMm + headerHeightMm(sheet) + 1;
-  items.push(...shifted(plan.list.ink, frame.leftMm, y));
+  let y = frame.topMm + sheet.headerMm + 1;
+  items.push(...shifted(plan.list.ink, frame.leftMm, y)); // pages of one point share it
   y += plan.list.heightMm + 1.2;
   const regions: SheetRegion[] = [];
   for (const part of plan.parts) {
-    items.push(...shifted(part.ink, frame.leftMm, y));
+    items.push(...moved(part.ink, frame.leftMm, y));
     regions.push({
       point: part.point.id,
       part: part.part,
@@ -79,7 +94,6 @@ function pointPage(sheet: Sheet, state: CardState, plan: PagePlan, place: Place)
     y += part.heightMm + BLOCK_GAP_MM;
   }
   const rest = plan.parts.at(-1)?.rest ?? "";
-  const heightMm = footerHeightMm(card, stamp, frame, widths);
   inkFooter(items, { card, stamp, place, note: rest === "" ? "" : `${rest}: page ${place.number + 1}`, frame, heightMm }, widths);
   const usedMm = plan.parts.reduce((sum, p) => sum + p.heightMm + BLOCK_GAP_MM, 0);
   return { kind: "points", ...place, ...paperOf(sheet), items, regions, usedMm, roomMm: plan.roomMm };
@@ -87,29 +101,16 @@ function pointPage(sheet: Sheet, state: CardState, plan: PagePlan, place: Place)
 
 /** What cannot be laid out without cutting, and what the sheet's rules do not allow. A card with any of these is not released. */
 export function sheetOverflow(card: CardDocument, widths: FontWidths, paper: SheetPaper = "a5"): SheetOverflow[] {
-  const sheet = sheetOf(card, paper, null, widths);
-  const { pages, trouble } = planPages(sheet);
-  const cover = planCover(sheet, new Map());
-  const pageOf = (point: string) => {
-    const at = pages.findIndex((page) => page.parts.some((p) => p.point.id === point));
-    return at < 0 ? null : cover.pages.length + at + 1;
-  };
-  return [
-    ...coverTrouble(cover.overMm),
-    ...trouble.map(({ point, page, message }) => ({ point, page: page + cover.pages.length - 1, message })),
-    ...card.content.points.flatMap((point): SheetOverflow[] => {
-      const cells = gridColumns(card, point).length;
-      if (cells <= MOST_CELLS) return [];
-      return [
-        {
-          point: point.id,
-          page: pageOf(point.id),
-          message: `The grid asks for ${cells} cells in a row. At most ${MOST_CELLS} fit: give the others to the recorder.`,
-        },
-      ];
-    }),
-    ...unprintable(card, widths),
-  ];
+  return measuredSheet(card, { paper, state: "draft", widths }).overflow;
+}
+
+function tooManyCells(card: CardDocument, startsOn: ReadonlyMap<string, number>): SheetOverflow[] {
+  return card.content.points.flatMap((point): SheetOverflow[] => {
+    const cells = gridColumns(card, point).length;
+    if (cells <= MOST_CELLS) return [];
+    const message = `The grid asks for ${cells} cells in a row. At most ${MOST_CELLS} fit: give the others to the recorder.`;
+    return [{ point: point.id, page: startsOn.get(point.id) ?? null, message }];
+  });
 }
 
 function coverTrouble(overMm: number): SheetOverflow[] {

@@ -1,34 +1,14 @@
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
 import { B612_WIDTHS } from "@/lib/testcards/b612-widths";
-import type { CardDocument, CardPoint, Step } from "@/lib/testcards/card";
-import { layOutSheet, sheetOverflow } from "@/lib/testcards/sheet";
+import type { CardPoint, Step } from "@/lib/testcards/card";
+import { layOutSheet, measuredSheet, sheetOverflow } from "@/lib/testcards/sheet";
 import { textWidthMm } from "@/lib/testcards/sheet-layout/typesetting";
-import type { SheetItem, SheetPage, SheetPaper } from "@/lib/testcards/sheet-types";
+import type { SheetItem, SheetPage } from "@/lib/testcards/sheet-types";
 import { CARD_STATES, type CardState } from "@/lib/testcards/words";
-import { BLANK_POINT, CHECK, CLIMB, SHUT, STAMP, sheetCard, sheetReading } from "./support/sheet-card";
+import { BLANK_POINT, CHECK, CLIMB, SHUT, sheetCard, sheetReading } from "./support/sheet-card";
+import { lay, lines, type TextItem, texts } from "./support/sheet-lines";
 import { abortEvent, abortNumber } from "./support/sheet-programme";
-
-const lay = (card: CardDocument, paper: SheetPaper = "a5", state: CardState = "released") =>
-  layOutSheet(card, { paper, state, widths: B612_WIDTHS, stamp: STAMP });
-
-type TextItem = Extract<SheetItem, { kind: "text" }>;
-const texts = (page: SheetPage, role?: TextItem["role"]) =>
-  page.items.filter((i): i is TextItem => i.kind === "text" && (role === undefined || i.role === role));
-
-/** A page's lines of one role as they are read: pieces on one baseline, in one column, joined. */
-function lines(page: SheetPage, role: TextItem["role"]): string[] {
-  const rows = new Map<number, TextItem[]>();
-  for (const item of texts(page, role)) rows.set(item.baselineMm, [...(rows.get(item.baselineMm) ?? []), item]);
-  return [...rows.values()].map((row) =>
-    row
-      .sort((a, b) => a.xMm - b.xMm)
-      .map((i) => i.text)
-      .join(" ")
-      .replaceAll("\u00a0", " ")
-      .replace(/ +/g, " "),
-  );
-}
 
 function box(item: SheetItem): { left: number; right: number; top: number; bottom: number } {
   if (item.kind === "text") {
@@ -236,6 +216,13 @@ describe("what does not fit", () => {
   test("is nothing on the demo's climb, on either paper", () => {
     expect(sheetOverflow(sheetCard([CLIMB]), B612_WIDTHS)).toEqual([]);
     expect(sheetOverflow(sheetCard([CLIMB]), B612_WIDTHS, "half-letter")).toEqual([]);
+  });
+
+  test("is told with the pages from one laying out, the same as from two", () => {
+    const card = sheetCard([CLIMB, SHUT], { remarks: "a long remark ".repeat(120) });
+    const options = { paper: "a5", state: "draft", widths: B612_WIDTHS } as const;
+    expect(measuredSheet(card, options)).toEqual({ pages: layOutSheet(card, options), overflow: sheetOverflow(card, B612_WIDTHS) });
+    expect(measuredSheet(card, options)).toEqual(measuredSheet(card, options));
   });
 
   test("names a seventh cell in a row, and still draws every cell at its least width", () => {

@@ -1,9 +1,9 @@
 import type { CardDocument } from "../card";
-import { layOutSheet, sheetOverflow } from "../sheet";
+import { measuredSheet } from "../sheet";
 import type { FontWidths } from "../sheet-types";
 import type { SheetFacts } from "./rule";
 
 /** The sheet as it will print on A5, the smaller paper: the work that a builder may do once and hand to reviewCard. */
 export function measureSheet(card: CardDocument, widths: FontWidths): SheetFacts {
-  return { overflow: sheetOverflow(card, widths, "a5"), pages: layOutSheet(card, { paper: "a5", state: "draft", widths }) };
+  return measuredSheet(card, { paper: "a5", state: "draft", widths });
 }

@@ -1,5 +1,5 @@
 import { type AbortLine, type AbortNumber, abortsOf, type CardDocument, type CardPoint, instrumentOf, parameterOf } from "../card";
-import { figure, withUnit } from "./gauge-figures";
+import { figure, isCalibrated, withUnit } from "./gauge-figures";
 import type { ListLine } from "./limit-lines";
 
 export type AbortList = { ifReached: boolean; lines: ListLine[]; events: string[] };
@@ -14,6 +14,7 @@ function numberLine(card: CardDocument, line: AbortNumber): ListLine {
   const instrument = instrumentOf(card, line.instrument);
   const gauge = instrument?.gaugeName ?? line.instrument;
   const name = line.perMinute ? (parameterOf(card, line.parameter)?.shortName ?? gauge) : gauge;
+  if (instrument && !isCalibrated(instrument) && line.setBy !== "gauge") return { name, value: "not calibrated" };
   const number = withUnit(figure(line.onGauge, instrument?.unit ?? null), instrument?.unit ?? null);
   const moment = ["idle", "take-off", "cold start"].includes(line.appliesWhen) ? `, ${line.appliesWhen}` : "";
   const window = line.perMinute ? ` in ${line.windowS ?? 60}\u00a0s` : "";

@@ -13,11 +13,11 @@ import {
   inkLines,
   inkRule,
   inkText,
+  moved,
   type Run,
   regular,
   type SetLine,
   setLines,
-  shifted,
   textWidthMm,
 } from "./typesetting";
 
@@ -38,7 +38,7 @@ function section(head: Run[], body: Block, widthMm: number, widths: FontWidths):
   inkRule(ink, 0, widthMm, 0, HAIRLINE_MM, ROLE);
   const lines = setLines(head, widthMm, LABEL_PT, widths);
   const headMm = inkLines(ink, lines, 0, 0.3, HEAD_MM, { sizePt: LABEL_PT, role: ROLE }) + 0.3;
-  ink.push(...shifted(body.ink, 0, headMm));
+  ink.push(...moved(body.ink, 0, headMm));
   return { ink, heightMm: headMm + body.heightMm + 0.4 };
 }
 
@@ -110,21 +110,27 @@ export function wordsBlock(card: CardDocument, body: Body, widthMm: number, widt
   return section([bold("WORDS")], { ink, heightMm: y }, widthMm, widths);
 }
 
-/** Normal ranges of what the pilot can see and the card watches, on the gauge, as many across as the longest allows. */
-export function normalRangesBlock(card: CardDocument, body: Body, widthMm: number, widths: FontWidths): Block | null {
-  const ranges = card.programme.parameters.flatMap(({ code, normal }) => {
+export type CoverRange = { name: string; value: string };
+
+/** Normal ranges, on the gauge, of what the card's gauges show. */
+export function coverRanges(card: CardDocument): CoverRange[] {
+  return card.programme.parameters.flatMap(({ code, normal }) => {
     const instrument = pilotsGauge(card, code);
     if (!normal || !instrument) return [];
-    const { low, high } = bandOnGauge(normal, instrument);
-    return [{ name: instrument.gaugeName, value: withUnit(bandText(low, high, instrument.unit), instrument.unit) }];
+    const band = bandOnGauge(normal, instrument);
+    const value = typeof band === "string" ? band : withUnit(bandText(band.low, band.high, instrument.unit), instrument.unit);
+    return [{ name: instrument.gaugeName, value }];
   });
-  if (ranges.length === 0) return null;
+}
+
+/** As many ranges across as the longest allows. */
+export function normalRangesBlock(ranges: readonly CoverRange[], body: Body, widthMm: number, widths: FontWidths): Block {
   const widest = Math.max(...ranges.map((r) => textWidthMm(`${r.name}  ${r.value}`, "bold", body.sizePt, widths)));
   const across = Math.max(1, Math.min(3, Math.floor(widthMm / (widest + 2))));
   const ink: Ink = [];
   let y = 0;
   for (let at = 0; at < ranges.length; at += across) {
-    const set: SetLine[][] = ranges
+    const set: (readonly SetLine[])[] = ranges
       .slice(at, at + across)
       .map(({ name, value }) => setLines([bold(name), regular(`  ${value}`)], widthMm / across - 1, body.sizePt, widths));
     for (const [i, lines] of set.entries())
@@ -145,7 +151,7 @@ export function thenBlock(card: CardDocument, widthMm: number, widths: FontWidth
     const part: Ink = [];
     const lead = places.length > 1 ? { air: "In the air", ground: "On the ground" }[place] : "";
     const heightMm = inkActions(part, lead, card.programme.thenActions[place], widthMm, widths);
-    ink.push(...shifted(part, 0, y));
+    ink.push(...moved(part, 0, y));
     y += heightMm;
   }
   return section([bold("THEN"), regular("  in full, in this order")], { ink, heightMm: y }, widthMm, widths);

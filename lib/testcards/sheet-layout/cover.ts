@@ -2,7 +2,9 @@ import {
   BODIES,
   type Body,
   blanksBlock,
+  type CoverRange,
   cautionBlock,
+  coverRanges,
   figuresBlock,
   goNoGoBlock,
   normalRangesBlock,
@@ -11,7 +13,7 @@ import {
   thenBlock,
   wordsBlock,
 } from "./cover-sections";
-import { fittingPt, footerHeightMm, type Place, type StateWord } from "./page-frame";
+import { fittingPt, type Place, type StateWord } from "./page-frame";
 import type { Sheet } from "./paginate";
 import { HEAVY_MM, LABEL_PT, RULE_MM } from "./paper";
 import type { Block } from "./point-lead";
@@ -24,9 +26,9 @@ import {
   inkLines,
   inkRule,
   inkText,
+  moved,
   regular,
   setLines,
-  shifted,
   textWidthMm,
 } from "./typesetting";
 
@@ -82,16 +84,18 @@ function inkRevision(ink: Ink, { identity, content }: Sheet["card"], frame: Shee
   return heightMm + inkLines(ink, below, frame.leftMm, yMm + heightMm, 6.2, { sizePt: TITLE_PT, role: ROLE });
 }
 
-function sectionsIn(sheet: Sheet, body: Body, pages: ReadonlyMap<string, number>, withPoints: boolean): Block[] {
+type SameInAnyType = { figures: Block; actions: Block; ranges: CoverRange[] };
+
+function sectionsIn(sheet: Sheet, same: SameInAnyType, body: Body, pages: ReadonlyMap<string, number>, withPoints: boolean): Block[] {
   const { card, frame, widths } = sheet;
   const wide = frame.widthMm;
   return [
     blanksBlock(wide),
-    figuresBlock(card, wide, widths),
+    same.figures,
     ...(card.programme.goNoGo.length > 0 ? [goNoGoBlock(card, body, wide, widths)] : []),
     ...(card.programme.callWords.length > 0 ? [wordsBlock(card, body, wide, widths)] : []),
-    ...[normalRangesBlock(card, body, wide, widths)].filter((block) => block !== null),
-    thenBlock(card, wide, widths),
+    ...(same.ranges.length > 0 ? [normalRangesBlock(same.ranges, body, wide, widths)] : []),
+    same.actions,
     ...(withPoints && card.content.points.length > 0 ? [pointsBlock(card, pages, body, wide, widths)] : []),
     ...[remarksBlock(card, body, wide, widths)].filter((block) => block !== null),
   ];
@@ -103,13 +107,21 @@ const stack = (blocks: readonly Block[]) => blocks.reduce((sum, b) => sum + b.he
 
 /** The cover in the largest type that fits one page. In the least type what does not fit goes to a second cover page, whole. */
 export function planCover(sheet: Sheet, pages: ReadonlyMap<string, number>): CoverPlan {
-  const { card, stamp, frame, widths } = sheet;
+  const { card, frame, widths, footerMm } = sheet;
   const headMm = inkCoverHead([], sheet, "SUPERSEDED", { number: 8, of: 88 });
   const caution = cautionBlock(card, frame.widthMm, widths);
-  const roomMm = frame.heightMm - headMm - caution.heightMm - footerHeightMm(card, stamp, frame, widths) - 1;
+  const roomMm = frame.heightMm - headMm - caution.heightMm - footerMm - 1;
   // The list of points is a help, not a must: it goes before the type gets smaller.
-  const choices = BODIES.flatMap((body) => [true, false].map((withPoints) => sectionsIn(sheet, body, pages, withPoints)));
-  const blocks = choices.find((choice) => stack(choice) <= roomMm) ?? choices.at(-1) ?? [];
+  const same = {
+    figures: figuresBlock(card, frame.widthMm, widths),
+    actions: thenBlock(card, frame.widthMm, widths),
+    ranges: coverRanges(card),
+  };
+  let blocks: Block[] = [];
+  for (const [body, withPoints] of BODIES.flatMap((body) => [[body, true] as const, [body, false] as const])) {
+    blocks = sectionsIn(sheet, same, body, pages, withPoints);
+    if (stack(blocks) <= roomMm) break;
+  }
   const plan: CoverPlan = { pages: [{ ink: [], usedMm: 0 }], roomMm, overMm: Math.max(0, stack(blocks) - roomMm) };
   for (const block of blocks) {
     let page = plan.pages.at(-1);
@@ -117,10 +129,10 @@ export function planCover(sheet: Sheet, pages: ReadonlyMap<string, number>): Cov
       page = { ink: [], usedMm: 0 };
       plan.pages.push(page);
     }
-    page.ink.push(...shifted(block.ink, frame.leftMm, frame.topMm + headMm + SECTION_GAP_MM + page.usedMm));
+    page.ink.push(...moved(block.ink, frame.leftMm, frame.topMm + headMm + SECTION_GAP_MM + page.usedMm));
     page.usedMm += block.heightMm + SECTION_GAP_MM;
   }
-  const cautionTopMm = frame.bottomMm - footerHeightMm(card, stamp, frame, widths) - caution.heightMm;
-  plan.pages[0]?.ink.push(...shifted(caution.ink, frame.leftMm, cautionTopMm));
+  const cautionTopMm = frame.bottomMm - footerMm - caution.heightMm;
+  plan.pages[0]?.ink.push(...moved(caution.ink, frame.leftMm, cautionTopMm));
   return plan;
 }

@@ -1,8 +1,8 @@
-import { type CardDocument, type CardPoint, instrumentOf, type Limit, type PointLimit, parameterOf } from "../card";
+import { type CardDocument, type CardPoint, type Instrument, instrumentOf, type Limit, type PointLimit, parameterOf } from "../card";
 import { unitSymbol } from "../unit-symbols";
-import { sameDimension, type Unit } from "../units";
+import { rateUnitOf, sameDimension, type Unit } from "../units";
 import type { LimitCondition, Side } from "../words";
-import { bandText, differenceOnGauge, figure, onGauge, pilotsGauge, withUnit } from "./gauge-figures";
+import { bandText, differenceOnGauge, figure, gaugeText, type NoNumber, onGauge, pilotsGauge, withUnit } from "./gauge-figures";
 
 /** One line of the LIMITS or ABORT list: a gauge's name and the number on it, or words alone. */
 export type ListLine = { name: string; value: string };
@@ -11,6 +11,8 @@ export type ListLine = { name: string; value: string };
 const PLAIN: readonly LimitCondition[] = ["always", "at power", "full power"];
 
 type Row = { limit: Limit; gauge: number };
+type Unproved = { limit: Limit; word: NoNumber };
+type Rows = { rows: Row[]; unproved: Unproved[] };
 type Plain = { low: Row | null; high: Row | null; others: Row[] };
 
 const isPlainStatistic = (limit: Limit) => limit.statistic === "instant" || limit.statistic === "sustained";
@@ -37,12 +39,15 @@ export function parametersOf(card: CardDocument, points: readonly CardPoint[]): 
   return found;
 }
 
-function rowsOf(card: CardDocument, parameter: string): Row[] {
-  const instrument = pilotsGauge(card, parameter);
-  if (!instrument) return [];
-  return limitsInForce(card.programme.limits)
-    .filter((l) => l.parameter === parameter && isPlainStatistic(l) && sameDimension(l.unit, instrument.unit))
-    .map((limit) => ({ limit, gauge: onGauge(limit.value, limit.unit, limit.side, instrument) }));
+function rowsOf(limits: readonly Limit[], parameter: string, instrument: Instrument): Rows {
+  const found: Rows = { rows: [], unproved: [] };
+  for (const limit of limits) {
+    if (limit.parameter !== parameter || !isPlainStatistic(limit) || !sameDimension(limit.unit, instrument.unit)) continue;
+    const gauge = onGauge(limit.value, limit.unit, limit.side, instrument);
+    if (typeof gauge === "number") found.rows.push({ limit, gauge });
+    else found.unproved.push({ limit, word: gauge });
+  }
+  return found;
 }
 
 const stricter = (side: Side) => (a: Row, b: Row) => (side === "max" ? a.gauge - b.gauge : b.gauge - a.gauge);
@@ -62,23 +67,29 @@ function label(row: Row, plain: Plain): string {
   return s % 60 === 0 ? `${s / 60}\u00a0min` : `${s}\u00a0s`;
 }
 
-type Gauged = { code: string; name: string; unit: Unit; plain: Plain };
+type Gauged = { name: string; unit: Unit; plain: Plain; unproved: Unproved[] };
 
-function gaugedLines({ name, unit, plain }: Gauged): ListLine[] {
+function gaugedLines({ name, unit, plain, unproved }: Gauged): ListLine[] {
   const { low, high, others } = plain;
   const lines: ListLine[] = [];
   if (low && high) lines.push({ name, value: withUnit(bandText(low.gauge, high.gauge, unit), unit) });
   else if (high) lines.push({ name, value: withUnit(figure(high.gauge, unit), unit) });
   else if (low) lines.push({ name, value: `min ${withUnit(figure(low.gauge, unit), unit)}` });
   for (const row of others) lines.push({ name: label(row, plain), value: `${name} ${sided(row, unit)}` });
+  for (const value of new Set(unproved.map(wordFor))) lines.push({ name, value });
   return lines;
+}
+
+/** A gauge that was never calibrated says so once; one calibrated elsewhere on its dial says for which limit. */
+function wordFor({ limit, word }: Unproved): string {
+  return word === "not calibrated" || limit.side === "max" ? word : `min ${word}`;
 }
 
 function sided({ limit, gauge }: Row, unit: Unit): string {
   return `${limit.side === "min" ? "min " : ""}${withUnit(figure(gauge, unit), unit)}`;
 }
 
-const onlyMaxima = ({ plain }: Gauged) => plain.low === null && plain.high !== null;
+const onlyMaxima = ({ plain, unproved }: Gauged) => plain.low === null && plain.high !== null && unproved.length === 0;
 const sameShape = (a: Gauged, b: Gauged) =>
   a.plain.others.map((r) => label(r, a.plain)).join() === b.plain.others.map((r) => label(r, b.plain)).join();
 
@@ -103,18 +114,16 @@ function plainLines(gauged: readonly Gauged[]): ListLine[] {
   });
 }
 
+type OfParameter = Rows & { instrument: Instrument };
+
 /** Moments of their own (idle, take-off, cold start), only where one of the page's points has them. */
-function momentLines(card: CardDocument, parameters: ReadonlySet<string>, points: readonly CardPoint[]): ListLine[] {
+function momentLines(gauges: readonly OfParameter[], points: readonly CardPoint[]): ListLine[] {
   const occurring = new Set(points.filter((p) => p.cardTable).flatMap((p) => p.conditions));
-  return card.programme.parameters
-    .filter((p) => parameters.has(p.code))
-    .flatMap(({ code }) => {
-      const instrument = pilotsGauge(card, code);
-      if (!instrument) return [];
-      return rowsOf(card, code)
-        .filter(({ limit }) => !PLAIN.includes(limit.appliesWhen) && occurring.has(limit.appliesWhen))
-        .map((row) => ({ name: row.limit.appliesWhen, value: `${instrument.gaugeName} ${sided(row, instrument.unit)}` }));
-    });
+  const now = ({ limit }: { limit: Limit }) => !PLAIN.includes(limit.appliesWhen) && occurring.has(limit.appliesWhen);
+  return gauges.flatMap(({ instrument: { gaugeName, unit }, rows, unproved }) => [
+    ...rows.filter(now).map((row) => ({ name: row.limit.appliesWhen, value: `${gaugeName} ${sided(row, unit)}` })),
+    ...unproved.filter(now).map((row) => ({ name: row.limit.appliesWhen, value: `${gaugeName} ${wordFor(row)}` })),
+  ]);
 }
 
 /** The lowest speed that a position set, or recovered to, allows. Positions carry indicated speeds: no correction. */
@@ -135,22 +144,20 @@ function speedLine(card: CardDocument, points: readonly CardPoint[], listed: rea
 function ownLine(card: CardDocument, point: CardPoint, limit: PointLimit): ListLine {
   const reading = point.readings.find((r) => r.id === limit.reading);
   const instrument = instrumentOf(card, reading?.instrument ?? null);
-  const difference = limit.statistic !== "instant" && limit.statistic !== "sustained";
-  const min = limit.side === "min" ? "min " : "";
-  if (!instrument) return { name: limit.label, value: min + withUnit(figure(limit.value, limit.unit), limit.unit) };
-  if (difference && sameDimension(limit.unit, instrument.unit)) {
-    const value = differenceOnGauge(limit.value, limit.unit, limit.side, instrument);
-    return { name: limit.label, value: min + withUnit(figure(value, instrument.unit), instrument.unit) };
+  const said = (text: string): ListLine => ({ name: limit.label, value: limit.side === "min" ? `min ${text}` : text });
+  if (!instrument) return said(withUnit(figure(limit.value, limit.unit), limit.unit));
+  if (limit.statistic !== "instant" && limit.statistic !== "sustained") {
+    const change = [instrument.unit, rateUnitOf(instrument.unit)].find((unit) => unit !== null && sameDimension(limit.unit, unit));
+    if (change) return said(gaugeText(differenceOnGauge(limit.value, limit.unit, limit.side, instrument), change));
   }
-  const same = sameDimension(limit.unit, instrument.unit);
-  const value = same ? onGauge(limit.value, limit.unit, limit.side, instrument) : limit.value;
-  return { name: limit.label, value: min + withUnit(figure(value, instrument.unit), same ? instrument.unit : limit.unit) };
+  if (!sameDimension(limit.unit, instrument.unit)) return said(withUnit(figure(limit.value, limit.unit), limit.unit));
+  return said(gaugeText(onGauge(limit.value, limit.unit, limit.side, instrument), instrument.unit));
 }
 
 /** A programme's rate limit prints where a point watches that rate: as the change on the gauge in one minute. */
-function rateLines(card: CardDocument, points: readonly CardPoint[]): ListLine[] {
+function rateLines(card: CardDocument, limits: readonly Limit[], points: readonly CardPoint[]): ListLine[] {
   const watched = points.flatMap((p) => p.aborts.lines).flatMap((l) => (l.kind === "number" && l.perMinute ? [l] : []));
-  return limitsInForce(card.programme.limits)
+  return limits
     .filter((l) => l.statistic === "rate")
     .flatMap((limit) => {
       const line = watched.find((w) => w.parameter === limit.parameter && w.side === limit.side);
@@ -158,28 +165,39 @@ function rateLines(card: CardDocument, points: readonly CardPoint[]): ListLine[]
       if (!instrument) return [];
       const value = differenceOnGauge(limit.value, limit.unit, limit.side, instrument);
       const name = parameterOf(card, limit.parameter)?.shortName ?? instrument.gaugeName;
+      if (typeof value === "string") return [{ name: `${name} in 60\u00a0s`, value }];
       return [{ name, value: `${figure(value, instrument.unit)}\u00a0${unitSymbol(instrument.unit)} in 60\u00a0s` }];
     });
 }
 
-/** The LIMITS list of a page, on the gauge: the plain lines of the whole card, then what only this page's points add. */
-export function limitLines(card: CardDocument, points: readonly CardPoint[], onCard: readonly CardPoint[]): ListLine[] {
+/**
+ * The LIMITS list of a page, on the gauge: the plain lines of the whole card, then what only this page's points add.
+ * What all pages share is worked out once.
+ */
+export function limitLines(card: CardDocument): (points: readonly CardPoint[]) => ListLine[] {
+  const onCard = card.content.points;
+  const limits = limitsInForce(card.programme.limits);
   const parameters = parametersOf(card, onCard);
   const powers = new Set(onCard.flatMap((p) => p.conditions));
-  const occurs = (condition: LimitCondition) => condition === "always" || (PLAIN.includes(condition) && powers.has(condition));
-  const gauged = card.programme.parameters
+  const gauges = card.programme.parameters
     .filter((p) => parameters.has(p.code))
-    .flatMap(({ code }): Gauged[] => {
+    .flatMap(({ code }): OfParameter[] => {
       const instrument = pilotsGauge(card, code);
-      if (!instrument) return [];
-      const rows = rowsOf(card, code).filter(({ limit }) => occurs(limit.appliesWhen));
-      return rows.length === 0 ? [] : [{ code, name: instrument.gaugeName, unit: instrument.unit, plain: plainOf(rows) }];
+      return instrument ? [{ instrument, ...rowsOf(limits, code, instrument) }] : [];
     });
-  return [
-    ...plainLines(gauged),
-    ...speedLine(card, onCard, gauged),
-    ...momentLines(card, parameters, points),
-    ...rateLines(card, points),
+  const occurs = ({ limit: { appliesWhen } }: { limit: Limit }) =>
+    appliesWhen === "always" || (PLAIN.includes(appliesWhen) && powers.has(appliesWhen));
+  const gauged = gauges.flatMap(({ instrument, ...found }): Gauged[] => {
+    const rows = found.rows.filter(occurs);
+    const unproved = found.unproved.filter(occurs);
+    if (rows.length + unproved.length === 0) return [];
+    return [{ name: instrument.gaugeName, unit: instrument.unit, plain: plainOf(rows), unproved }];
+  });
+  const shared = [...plainLines(gauged), ...speedLine(card, onCard, gauged)];
+  return (points) => [
+    ...shared,
+    ...momentLines(gauges, points),
+    ...rateLines(card, limits, points),
     ...points.flatMap((point) => point.limits.map((limit) => ownLine(card, point, limit))),
   ];
 }

@@ -7,14 +7,22 @@ import { footerHeightMm, inkHeader } from "./page-frame";
 import { type Frame, RULE_MM, usableFrame } from "./paper";
 import { gridBlocks, outcomeBlock, singleBlocks } from "./point-cells";
 import { type Block, leadBlocks, titleBlock } from "./point-lead";
-import type { Ink } from "./typesetting";
+import { type Ink, moved, shifted } from "./typesetting";
 
 export const BLOCK_GAP_MM = 1;
 const HEAD_GAP_MM = 1;
 const LIST_GAP_MM = 1.2;
 const FOOT_GAP_MM = 0.8;
 
-export type Sheet = { card: CardDocument; paper: SheetPaper; stamp: SheetStamp | null; widths: FontWidths; frame: Frame };
+export type Sheet = {
+  card: CardDocument;
+  paper: SheetPaper;
+  stamp: SheetStamp | null;
+  widths: FontWidths;
+  frame: Frame;
+  headerMm: number;
+  footerMm: number;
+};
 
 /** What a point is made of, top to bottom. `head` is drawn before the first row of every part. */
 type Member = { kind: "lead" | "row" | "single" | "outcome"; block: Block; head: Block | null; label: string };
@@ -27,11 +35,9 @@ export type PagePlan = { parts: Part[]; points: CardPoint[]; list: Block; roomMm
 export type Trouble = { point: string; page: number; message: string };
 
 export function sheetOf(card: CardDocument, paper: SheetPaper, stamp: SheetStamp | null, widths: FontWidths): Sheet {
-  return { card, paper, stamp, widths, frame: usableFrame(paper) };
-}
-
-export function headerHeightMm({ card, frame, widths }: Sheet): number {
-  return inkHeader([], card, "SUPERSEDED", { number: 88, of: 88 }, frame, widths);
+  const frame = usableFrame(paper);
+  const headerMm = inkHeader([], card, "SUPERSEDED", { number: 88, of: 88 }, frame, widths);
+  return { card, paper, stamp, widths, frame, headerMm, footerMm: footerHeightMm(card, stamp, frame, widths) };
 }
 
 function wholeOf(sheet: Sheet, point: CardPoint, index: number): Whole {
@@ -57,8 +63,9 @@ function wholeOf(sheet: Sheet, point: CardPoint, index: number): Whole {
 
 const LEAD_AIR_MM = 0.5;
 
-/** Height of a run of members under a title, grid heads included. */
-function stackedMm(titleMm: number, members: readonly Member[]): number {
+/** Heights of a title with none, one, two … of the members under it, grid heads included. */
+function stackedMm(titleMm: number, members: readonly Member[]): number[] {
+  const heights = [titleMm];
   let height = titleMm;
   let head: Block | null = null;
   for (const member of members) {
@@ -66,33 +73,31 @@ function stackedMm(titleMm: number, members: readonly Member[]): number {
     if (member.kind === "lead" && head === null) height += member === members[0] ? LEAD_AIR_MM : 0;
     head = member.head;
     height += member.block.heightMm;
+    heights.push(height);
   }
-  return height;
+  return heights;
 }
 
-function put(ink: Ink, block: Block, yMm: number): void {
-  for (const item of block.ink) {
-    if (item.kind === "text") ink.push({ ...item, baselineMm: item.baselineMm + yMm });
-    else if (item.kind === "line") ink.push({ ...item, y1Mm: item.y1Mm + yMm, y2Mm: item.y2Mm + yMm });
-    else ink.push({ ...item, yMm: item.yMm + yMm });
-  }
+/** How many members stand within heightMm. */
+function fitting(heights: readonly number[], heightMm: number): number {
+  const over = heights.findIndex((height, count) => count > 0 && height > heightMm);
+  return over < 0 ? heights.length - 1 : over - 1;
 }
 
 function drawPart(sheet: Sheet, whole: Whole, part: number, members: readonly Member[], rest: readonly Member[]): Part {
   const { frame, widths } = sheet;
-  const ink: Ink = [];
   const title = titleBlock(whole.numberOnCard, whole.point, part > 1, frame.widthMm, widths);
-  put(ink, title, 0);
+  const ink: Ink = [...title.ink];
   let y = title.heightMm;
   let head: Block | null = null;
   for (const member of members) {
     if (member.head !== null && member.head !== head) {
-      put(ink, member.head, y);
+      ink.push(...shifted(member.head.ink, 0, y)); // drawn again on the next page
       y += member.head.heightMm;
     }
     if (member.kind === "lead" && member === members[0]) y += LEAD_AIR_MM;
     head = member.head;
-    put(ink, member.block, y);
+    ink.push(...moved(member.block.ink, 0, y));
     y += member.block.heightMm;
   }
   ink.push({ kind: "rect", xMm: 0, yMm: 0, widthMm: frame.widthMm, heightMm: y, strokeMm: RULE_MM, filled: false, role: "point" });
@@ -116,8 +121,7 @@ function restWords(all: readonly Member[], rest: readonly Member[]): string {
 
 /** How many members may be set in heightMm: never a lead without its first cells, never the outcome boxes alone on the next page. */
 function takes(titleMm: number, members: readonly Member[], heightMm: number): number {
-  let count = 0;
-  while (count < members.length && stackedMm(titleMm, members.slice(0, count + 1)) <= heightMm + 1e-6) count += 1;
+  const count = fitting(stackedMm(titleMm, members), heightMm + 1e-6);
   if (count === members.length) return count;
   const leads = members.filter((m) => m.kind === "lead").length;
   if (count <= leads) return 0;
@@ -126,14 +130,16 @@ function takes(titleMm: number, members: readonly Member[], heightMm: number): n
 }
 
 export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[] } {
-  const { card, widths, frame, stamp } = sheet;
+  const { card, widths, frame } = sheet;
   const all = card.content.points;
-  const fixedMm = headerHeightMm(sheet) + HEAD_GAP_MM + LIST_GAP_MM + FOOT_GAP_MM + footerHeightMm(card, stamp, frame, widths);
+  const limitsOf = limitLines(card);
+  const fixedMm = sheet.headerMm + HEAD_GAP_MM + LIST_GAP_MM + FOOT_GAP_MM + sheet.footerMm;
+  const keys = new Map(all.map((point) => [point, pageKey(card, point)]));
   const blank = (points: CardPoint[]): PagePlan => {
     const [first] = points;
     const then = first?.place === "ground" ? card.programme.thenLine.ground : card.programme.thenLine.air;
     const aborts = first ? abortList(card, first) : { ifReached: false, lines: [], events: [] };
-    const list = listBlock(limitLines(card, points, all), aborts, then, frame.widthMm, widths);
+    const list = listBlock(limitsOf(points), aborts, then, frame.widthMm, widths);
     return { parts: [], points, list, roomMm: frame.heightMm - fixedMm - list.heightMm };
   };
   const pages: PagePlan[] = [];
@@ -145,7 +151,7 @@ export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[]
   const joined = (point: CardPoint): PagePlan | null => {
     const open = pages.at(-1);
     const [first] = open?.points ?? [];
-    if (!open || !first || pageKey(card, first) !== pageKey(card, point)) return null;
+    if (!open || !first || keys.get(first) !== keys.get(point)) return null;
     const page = { ...blank([...open.points, point]), parts: open.parts };
     return usedMm(page) <= page.roomMm ? page : null;
   };
@@ -157,17 +163,18 @@ export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[]
     let members = whole.members;
     const together = joined(point);
     const here = together === null ? 0 : takes(titleMm(1), members, together.roomMm - usedMm(together));
-    const wholeOnFresh = stackedMm(titleMm(1), members) <= fresh.roomMm;
+    const wholeOnFresh = (stackedMm(titleMm(1), members).at(-1) ?? 0) <= fresh.roomMm;
     if (together && (here === members.length || (here > 0 && !wholeOnFresh))) pages[pages.length - 1] = together;
     else pages.push(fresh);
     for (let part = 1; members.length > 0; part += 1) {
-      if (part > 1) pages.push(blank([point]));
+      if (part > 1) pages.push({ ...fresh, parts: [] });
       const page = pages.at(-1) ?? fresh;
       let count = takes(titleMm(part), members, page.roomMm - usedMm(page));
       if (count === 0) {
-        count = crammed(titleMm(part), members, page.roomMm);
+        const heights = stackedMm(titleMm(part), members);
+        count = Math.max(1, fitting(heights, page.roomMm)); // at least one, so that the point is never lost
         const wholeLead = members.slice(count).every((m) => m.kind !== "lead");
-        const high = stackedMm(titleMm(part), members.slice(0, count));
+        const high = heights[count] ?? 0;
         if (!wholeLead || high > page.roomMm + 1e-6) {
           trouble.push({ point: point.id, page: pageNumber(), message: crampedMessage(whole, high - page.roomMm, page) });
         }
@@ -178,13 +185,6 @@ export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[]
     }
   }
   return { pages, trouble };
-}
-
-/** As many members as fit when the rule about leads cannot be kept; at least one, so that the point is never lost. */
-function crammed(titleMm: number, members: readonly Member[], roomMm: number): number {
-  let count = 1;
-  while (count < members.length && stackedMm(titleMm, members.slice(0, count + 1)) <= roomMm) count += 1;
-  return count;
 }
 
 function crampedMessage({ numberOnCard, point }: Whole, overMm: number, page: PagePlan): string {

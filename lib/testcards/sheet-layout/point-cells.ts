@@ -29,14 +29,14 @@ export type Column = { reading: Reading | null; head: string; sub: string };
 export type GridBlocks = { head: Block; rows: Block[]; labels: string[] };
 type Across = { paper: SheetPaper; widthMm: number; widths: FontWidths };
 
-/** The expected band on the gauge of a reading, as it stands in a cell's head. */
+/** The expected band on the gauge of a reading, as it stands in a cell's head; none where the gauge has no number for it. */
 export function expectedText(card: CardDocument, reading: Reading): string {
   const instrument = instrumentOf(card, reading.instrument);
   if (reading.expected === null) return "";
   if (!instrument || !sameDimension(reading.expected.unit, instrument.unit))
     return bandText(reading.expected.low, reading.expected.high, null);
-  const { low, high } = bandOnGauge(reading.expected, instrument);
-  return bandText(low, high, instrument.unit);
+  const band = bandOnGauge(reading.expected, instrument);
+  return typeof band === "string" ? "" : bandText(band.low, band.high, instrument.unit);
 }
 
 function headWithUnit(head: string, reading: Reading): string {

@@ -81,7 +81,7 @@ export function entryRuns(card: CardDocument, point: CardPoint): Run[] {
   return [bold(positions), regular(positions === "" || rest === "" ? rest : `  ${rest}`)];
 }
 
-type Lines = { lines: SetLine[]; xMm: number; role: "entry" | "step" | "recovery" };
+type Lines = { lines: readonly SetLine[]; xMm: number; role: "entry" | "step" | "recovery" };
 
 /** One block a line: a text too long for any page then still breaks between lines. */
 function lineBlocks({ lines, xMm, role }: Lines): Block[] {

@@ -13,6 +13,28 @@ export function capHeightMm(sizePt: number): number {
   return CAP_HEIGHT_EM * sizePt * MM_PER_PT;
 }
 
+/** A sheet of twelve points holds some 1500 texts; a change to a card leaves nearly all of them as they were. */
+const MOST_REMEMBERED = 6000;
+const printed = new Map<string, string>();
+const measured = new WeakMap<FontWidths, Map<string, number>>();
+const broken = new WeakMap<FontWidths, Map<string, readonly SetLine[]>>();
+
+/** What was worked out before for the same key: text alone decides the answer, so it is never stale. */
+function remembered<T>(memory: Map<string, T>, key: string, work: () => T): T {
+  const known = memory.get(key);
+  if (known !== undefined) return known;
+  if (memory.size >= MOST_REMEMBERED) memory.clear();
+  const found = work();
+  memory.set(key, found);
+  return found;
+}
+
+function memoryOf<T>(memories: WeakMap<FontWidths, Map<string, T>>, widths: FontWidths): Map<string, T> {
+  const memory = memories.get(widths) ?? new Map<string, T>();
+  memories.set(widths, memory);
+  return memory;
+}
+
 const REWRITTEN: Record<string, string> = {
   "\u202f": "\u00a0",
   "\u2009": "\u00a0",
@@ -29,12 +51,16 @@ const REWRITTEN: Record<string, string> = {
 /** A figure and the unit after it stay on one line. */
 const FIGURE_AND_UNIT = /(\d) (?=(?:°C|°F|kt|ft|min|psi|bar|inHg|rpm|kg|mm|mL|NM|AGL|PA|[sLhmN%])(?![\p{L}\d]))/gu;
 
+const NEEDS_REWRITING = /[\u202f\u2009\u2007\t\n\r≤≥\u2010\u2011]/g;
+
 /** Text as the sheet's typeface can print it: composed, one line, thin spaces as plain ones that do not break. */
 export function printable(text: string): string {
-  return [...text.normalize("NFC")]
-    .map((letter) => REWRITTEN[letter] ?? letter)
-    .join("")
-    .replace(FIGURE_AND_UNIT, "$1\u00a0");
+  return remembered(printed, text, () =>
+    text
+      .normalize("NFC")
+      .replace(NEEDS_REWRITING, (letter) => REWRITTEN[letter] ?? letter)
+      .replace(FIGURE_AND_UNIT, "$1\u00a0"),
+  );
 }
 
 /** Letters that the typeface lacks; they would print as an empty box. */
@@ -43,8 +69,11 @@ export function unprintableLetters(text: string, widths: FontWidths): string[] {
 }
 
 export function textWidthMm(text: string, weight: FontWeight, sizePt: number, widths: FontWidths): number {
-  let perMille = 0;
-  for (const letter of text) perMille += widths[weight][letter.codePointAt(0) ?? 0] ?? widths.missing;
+  const perMille = remembered(memoryOf(measured, widths), `${weight} ${text}`, () => {
+    let sum = 0;
+    for (const letter of text) sum += widths[weight][letter.codePointAt(0) ?? 0] ?? widths.missing;
+    return sum;
+  });
   return (perMille / 1000) * sizePt * MM_PER_PT;
 }
 
@@ -84,7 +113,12 @@ function cutToWidth(word: Word, widthMm: number, sizePt: number, widths: FontWid
 }
 
 /** Breaks runs of text into lines no wider than widthMm. Words break only where one alone is too wide. Nothing is dropped. */
-export function setLines(runs: readonly Run[], widthMm: number, sizePt: number, widths: FontWidths): SetLine[] {
+export function setLines(runs: readonly Run[], widthMm: number, sizePt: number, widths: FontWidths): readonly SetLine[] {
+  const key = `${sizePt} ${widthMm} ${runs.map((run) => run.weight + run.text).join("\u0000")}`;
+  return remembered(memoryOf(broken, widths), key, () => breakIntoLines(runs, widthMm, sizePt, widths));
+}
+
+function breakIntoLines(runs: readonly Run[], widthMm: number, sizePt: number, widths: FontWidths): SetLine[] {
   const lines: SetLine[] = [];
   let line: SetLine = { pieces: [], widthMm: 0 };
   const fits = (word: Word) => textWidthMm(word.text, word.weight, sizePt, widths) <= widthMm;
@@ -155,16 +189,28 @@ export function inkRule(ink: Ink, x1Mm: number, x2Mm: number, yMm: number, strok
   ink.push({ kind: "line", x1Mm, y1Mm: yMm, x2Mm, y2Mm: yMm, strokeMm, role });
 }
 
-/** The same drawing further down or across. */
-export function shifted(ink: Ink, dxMm: number, dyMm: number): Ink {
-  return ink.map((item) => {
-    switch (item.kind) {
-      case "text":
-        return { ...item, xMm: item.xMm + dxMm, baselineMm: item.baselineMm + dyMm };
-      case "line":
-        return { ...item, x1Mm: item.x1Mm + dxMm, x2Mm: item.x2Mm + dxMm, y1Mm: item.y1Mm + dyMm, y2Mm: item.y2Mm + dyMm };
-      default:
-        return { ...item, xMm: item.xMm + dxMm, yMm: item.yMm + dyMm };
+/** Moves a drawing that stands nowhere else yet: a sheet has thousands of items, and copying each at every step costs the most time. */
+export function moved(ink: Ink, dxMm: number, dyMm: number): Ink {
+  for (const item of ink) {
+    if (item.kind === "line") {
+      item.x1Mm += dxMm;
+      item.x2Mm += dxMm;
+      item.y1Mm += dyMm;
+      item.y2Mm += dyMm;
+    } else {
+      item.xMm += dxMm;
+      if (item.kind === "text") item.baselineMm += dyMm;
+      else item.yMm += dyMm;
     }
-  });
+  }
+  return ink;
+}
+
+/** The same drawing once more, further down or across. */
+export function shifted(ink: Ink, dxMm: number, dyMm: number): Ink {
+  return moved(
+    ink.map((item) => ({ ...item })),
+    dxMm,
+    dyMm,
+  );
 }

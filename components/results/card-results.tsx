@@ -7,16 +7,17 @@ import { formatNumber, ownDecimals } from "@/lib/format/number";
 import { withUnit } from "@/lib/format/unit";
 import { asSentences } from "@/lib/format/words";
 import { type CardDocument, instrumentOf, parameterOf } from "@/lib/testcards/card";
-import type { CheckReport, DisciplineLine, PointReport } from "@/lib/testcards/debrief-types";
+import type { CheckReport, Debrief, DisciplineLine, PointReport } from "@/lib/testcards/debrief-types";
 import { type ResultRow, resultRows } from "./result-rows";
 import { ResultsTable } from "./results-table";
+import { SeriesPlots } from "./series-plots";
 
 /** What the core made of one card, point by point, and what follows from it. */
-export function CardResults({ document, report }: { document: CardDocument; report: CheckReport }) {
+export function CardResults({ document, report, debrief }: { document: CardDocument; report: CheckReport; debrief: Debrief }) {
   return (
     <div className="flex flex-col gap-10">
       {report.points.map((point, index) => (
-        <PointResults key={point.point} document={document} report={report} point={point} index={index} />
+        <PointResults key={point.point} document={document} report={report} debrief={debrief} point={point} index={index} />
       ))}
     </div>
   );
@@ -25,11 +26,13 @@ export function CardResults({ document, report }: { document: CardDocument; repo
 function PointResults({
   document,
   report,
+  debrief,
   point,
   index,
 }: {
   document: CardDocument;
   report: CheckReport;
+  debrief: Debrief;
   point: PointReport;
   index: number;
 }) {
@@ -56,6 +59,7 @@ function PointResults({
             <ResultsTable label={`Results of ${planned.title}`} rows={rows} />
           </div>
           <Strips document={document} rows={rows} />
+          <SeriesPlots document={document} point={planned} report={report} debrief={debrief} />
           <Discipline document={document} lines={point.disciplines} />
           {point.outsideExpected.length > 0 ? (
             <p className="mt-4">

@@ -61,7 +61,7 @@ export default async function ResultsPage({ params, searchParams }: Props) {
           <p className="mb-4 text-ink-soft text-sm">
             Hot-day basis {report.basis ?? "not set"}. U is expanded, k = 2. Hot-day values are calculated, not flown. Compared unrounded.
           </p>
-          <CardResults document={card.document} report={report} />
+          <CardResults document={card.document} report={report} debrief={debrief.content} />
         </Section>
       ))}
       {may.dispose || results.dispositions.length > 0 ? (

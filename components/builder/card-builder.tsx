@@ -115,54 +115,56 @@ export function CardBuilder(props: CardBuilderProps) {
         if (template && drop) put(template, drop.to);
       }}
     >
-      <div className="flex flex-wrap items-center gap-x-4 gap-y-1 border-rule border-b px-4 py-2">
-        <div className="flex grow flex-wrap items-center gap-x-4 gap-y-1">
-          <h1 className="font-bold text-xl">
-            Card {identity.number} <span className="ms-2">{content.title}</span>
-          </h1>
-          {props.beside}
+      <div className="sticky top-0 z-20 bg-paper">
+        <div className="flex flex-wrap items-center gap-x-4 gap-y-1 border-rule border-b px-4 py-1">
+          <div className="flex grow flex-wrap items-center gap-x-4 gap-y-1">
+            <h1 className="font-bold text-xl">
+              Card {identity.number} <span className="ms-2">{content.title}</span>
+            </h1>
+            {props.beside}
+          </div>
+          <div className="flex gap-1">
+            <button
+              type="button"
+              className={buttonClass("quiet")}
+              disabled={state.past.length === 0}
+              onClick={() => dispatch({ type: "undo" })}
+              aria-label={`Undo ${state.past.at(-1)?.what ?? ""}`}
+              title="Undo (Ctrl Z)"
+            >
+              <Undo2 aria-hidden className="size-5" />
+            </button>
+            <button
+              type="button"
+              className={buttonClass("quiet")}
+              disabled={state.future.length === 0}
+              onClick={() => dispatch({ type: "redo" })}
+              aria-label={`Do again ${state.future.at(-1)?.what ?? ""}`}
+              title="Do again (Ctrl Shift Z)"
+            >
+              <Redo2 aria-hidden className="size-5" />
+            </button>
+          </div>
+          <SaveStatus save={state.save} version={state.version} />
         </div>
-        <div className="flex gap-1">
-          <button
-            type="button"
-            className={buttonClass("quiet")}
-            disabled={state.past.length === 0}
-            onClick={() => dispatch({ type: "undo" })}
-            aria-label={`Undo ${state.past.at(-1)?.what ?? ""}`}
-            title="Undo (Ctrl Z)"
-          >
-            <Undo2 aria-hidden className="size-5" />
-          </button>
-          <button
-            type="button"
-            className={buttonClass("quiet")}
-            disabled={state.future.length === 0}
-            onClick={() => dispatch({ type: "redo" })}
-            aria-label={`Do again ${state.future.at(-1)?.what ?? ""}`}
-            title="Do again (Ctrl Shift Z)"
-          >
-            <Redo2 aria-hidden className="size-5" />
-          </button>
-        </div>
-        <SaveStatus save={state.save} version={state.version} />
+        <nav aria-label="Parts of the builder" className="flex border-rule border-b wide:hidden">
+          {(["shelf", "sheet", "side"] as const).map((one) => (
+            <button
+              key={one}
+              type="button"
+              aria-pressed={pane === one}
+              onClick={() => setPane(one)}
+              className="min-h-12 flex-1 border-b-2 border-transparent aria-pressed:border-ink aria-pressed:font-bold"
+            >
+              {one === "shelf" ? "Shelf" : one === "sheet" ? "Sheet" : `Release (${must})`}
+            </button>
+          ))}
+        </nav>
+        <SaveProblem save={state.save} dispatch={dispatch} />
       </div>
-      <nav aria-label="Parts of the builder" className="flex border-rule border-b wide:hidden">
-        {(["shelf", "sheet", "side"] as const).map((one) => (
-          <button
-            key={one}
-            type="button"
-            aria-pressed={pane === one}
-            onClick={() => setPane(one)}
-            className="min-h-12 flex-1 border-b-2 border-transparent aria-pressed:border-ink aria-pressed:font-bold"
-          >
-            {one === "shelf" ? "Shelf" : one === "sheet" ? "Sheet" : `Release (${must})`}
-          </button>
-        ))}
-      </nav>
-      <SaveProblem save={state.save} dispatch={dispatch} />
-      <div className="wide:grid wide:grid-cols-[300px_minmax(0,1fr)_400px]">
+      <div className="wide:grid wide:grid-cols-[320px_minmax(0,1fr)_400px]">
         <aside
-          className={`border-rule bg-sheet p-4 wide:sticky wide:top-0 wide:block wide:max-h-dvh wide:overflow-y-auto wide:border-e ${pane === "shelf" ? "" : "hidden"}`}
+          className={`border-rule bg-sheet p-4 wide:sticky wide:top-14 wide:block wide:max-h-[calc(100dvh-3.5rem)] wide:overflow-y-auto wide:border-e ${pane === "shelf" ? "" : "hidden"}`}
         >
           <ShelfPanel
             shelf={shelf}
@@ -185,7 +187,7 @@ export function CardBuilder(props: CardBuilderProps) {
         <aside
           ref={sideRef}
           tabIndex={-1}
-          className={`border-rule bg-sheet p-4 wide:sticky wide:top-0 wide:block wide:max-h-dvh wide:overflow-y-auto wide:border-s ${pane === "side" ? "" : "hidden"}`}
+          className={`border-rule bg-sheet p-4 wide:sticky wide:top-14 wide:block wide:max-h-[calc(100dvh-3.5rem)] wide:overflow-y-auto wide:border-s ${pane === "side" ? "" : "hidden"}`}
         >
           <div className="mb-4 flex gap-4 border-rule border-b text-base" role="tablist" aria-label="Beside the sheet">
             <SideTab on={side.show === "findings"} onClick={() => show({ show: "findings" })} label={`Before release (${must})`} />
@@ -227,7 +229,7 @@ export function CardBuilder(props: CardBuilderProps) {
               }}
             />
           ) : side.show === "cover" ? (
-            <CardSettings content={content} change={(patch, what) => dispatch({ type: "change card", patch, what })} />
+            <CardSettings card={card} content={content} change={(patch, what) => dispatch({ type: "change card", patch, what })} />
           ) : (
             <>
               <FindingsPanel
@@ -244,6 +246,7 @@ export function CardBuilder(props: CardBuilderProps) {
                 saved={state.save.kind === "saved"}
                 findings={findings}
                 answers={answers}
+                empty={content.points.length === 0}
               />
               {props.comments.length > 0 ? (
                 <div className="mt-6">

@@ -1,5 +1,5 @@
 "use client";
-import { type ReactNode, useEffect, useId, useState } from "react";
+import { type ReactNode, useEffect, useId, useRef, useState } from "react";
 import { CONTROL } from "@/components/ui/input";
 
 type Common = { label: string; hideLabel?: boolean; error?: string | null; hint?: ReactNode; disabled?: boolean; focusKey?: string };
@@ -86,27 +86,31 @@ type NumberProps = Common & {
   high?: number;
 };
 
-/** Keeps what was typed while it is no number, says so, and passes on only numbers in range. */
+/** Keeps what was typed while it cannot be used and says so at once; the card then holds no number rather than an older one. */
 export function NumberField({ value, onChange, unit, optional = false, low, high, ...common }: NumberProps) {
   const id = useId();
   const [typed, setTyped] = useState(shown(value));
-  useEffect(() => setTyped((now) => (readNumber(now) === value ? now : shown(value))), [value]);
-  const number = readNumber(typed);
-  const problem =
-    typed.trim() === ""
-      ? optional
-        ? null
-        : "Enter a number."
-      : number === null
-        ? "Enter a number, such as 102.5."
-        : low !== undefined && number < low
-          ? `Enter ${low} or more.`
-          : high !== undefined && number > high
-            ? `Enter ${high} or less.`
-            : null;
+  const passedOn = useRef(value);
+  useEffect(() => {
+    if (passedOn.current === value) return;
+    passedOn.current = value;
+    setTyped(shown(value));
+  }, [value]);
   const [left, setLeft] = useState(false);
+  const number = readNumber(typed);
+  const outside = number === null ? null : rangeProblem(number, low, high);
+  const missing = typed.trim() === "" ? (optional ? null : "Enter a number.") : number === null ? "Enter a number, such as 102.5." : null;
+  const problem = outside ?? (left ? missing : null);
+  const type = (next: string) => {
+    setTyped(next);
+    const read = readNumber(next);
+    const usable = read !== null && rangeProblem(read, low, high) === null ? read : null;
+    if (usable === null && !optional) return;
+    passedOn.current = usable;
+    onChange(usable);
+  };
   return (
-    <Frame id={id} {...common} error={common.error ?? (left ? problem : null)}>
+    <Frame id={id} {...common} error={common.error ?? problem}>
       <div className="flex items-center gap-2">
         <input
           id={id}
@@ -116,21 +120,20 @@ export function NumberField({ value, onChange, unit, optional = false, low, high
           value={typed}
           disabled={common.disabled}
           data-focus={common.focusKey}
-          aria-invalid={left && problem ? true : undefined}
-          aria-describedby={left && problem ? `${id}-error` : undefined}
+          aria-invalid={problem ? true : undefined}
+          aria-describedby={problem ? `${id}-error` : undefined}
           onBlur={() => setLeft(true)}
-          onChange={(event) => {
-            const next = event.target.value;
-            setTyped(next);
-            const read = readNumber(next);
-            if (next.trim() === "" && optional) onChange(null);
-            else if (read !== null && !(low !== undefined && read < low) && !(high !== undefined && read > high)) onChange(read);
-          }}
+          onChange={(event) => type(event.target.value)}
         />
         {unit ? <span className="shrink-0 text-sm text-ink-soft">{unit}</span> : null}
       </div>
     </Frame>
   );
+}
+
+function rangeProblem(number: number, low: number | undefined, high: number | undefined): string | null {
+  if (low !== undefined && number < low) return `Enter ${low} or more.`;
+  return high !== undefined && number > high ? `Enter ${high} or less.` : null;
 }
 
 function shown(value: number | null): string {

@@ -1,17 +1,18 @@
 "use client";
-import { Check } from "lucide-react";
+import { Check, Minus } from "lucide-react";
 import { useState } from "react";
 import { Input } from "@/components/ui/input";
 import type { Finding } from "@/lib/testcards/readiness-types";
 import { findingKey } from "@/lib/workflow/card/policy";
 import { FindingMark } from "./finding-mark";
+import type { CardFact } from "./use-card-paper";
 
 type PanelProps = {
   findings: Finding[];
   answers: Record<string, string>;
   onAnswer: (key: string, answer: string) => void;
   onJump: (finding: Finding) => void;
-  facts: string[];
+  facts: CardFact[];
   readOnly?: boolean;
 };
 
@@ -35,10 +36,14 @@ export function FindingsPanel({ findings, answers, onAnswer, onJump, facts, read
             readOnly={readOnly}
           />
         ))}
-        {facts.map((fact) => (
-          <li key={fact} className="flex gap-3 border-rule border-b py-3">
-            <Check aria-hidden className="mt-0.5 size-5 shrink-0 text-ink-green" />
-            <span>{fact}</span>
+        {facts.map(({ text, well }) => (
+          <li key={text} className="flex gap-3 border-rule border-b py-3">
+            {well ? (
+              <Check aria-label="well" className="mt-0.5 size-5 shrink-0 text-ink-green" />
+            ) : (
+              <Minus aria-label="not yet" className="mt-0.5 size-5 shrink-0 text-ink-red" />
+            )}
+            <span>{text}</span>
           </li>
         ))}
       </ul>

@@ -8,16 +8,25 @@ import type { Finding } from "@/lib/testcards/readiness-types";
 import { openMusts, unanswered } from "@/lib/workflow/card/policy";
 import { PrintSheet } from "./print-sheet";
 
-type SendProps = { cardId: string; letter: string; version: number; saved: boolean; findings: Finding[]; answers: Record<string, string> };
+type SendProps = {
+  cardId: string;
+  letter: string;
+  version: number;
+  saved: boolean;
+  findings: Finding[];
+  answers: Record<string, string>;
+  empty: boolean;
+};
 
 /** Says what still stands in the way instead of a dead button; the server decides again. */
-export function SendForReview({ cardId, letter, version, saved, findings, answers }: SendProps) {
+export function SendForReview({ cardId, letter, version, saved, findings, answers, empty }: SendProps) {
   const router = useRouter();
   const [busy, setBusy] = useState(false);
   const [problem, setProblem] = useState<string | null>(null);
   const musts = openMusts(findings).length;
   const silent = unanswered(findings, answers).length;
   async function send() {
+    if (empty) return setProblem("Put at least one test point on the card first.");
     if (musts > 0) return setProblem(`Mend ${musts === 1 ? "the one “must”" : `the ${musts} “must” findings`} first.`);
     if (silent > 0)
       return setProblem(

@@ -1,6 +1,7 @@
 "use client";
 import { useDraggable, useDroppable } from "@dnd-kit/core";
 import { GripVertical } from "lucide-react";
+import { useEffect, useRef } from "react";
 import { SheetPageView } from "@/components/sheet/sheet-page";
 import type { CardPoint } from "@/lib/testcards/card";
 import type { Finding } from "@/lib/testcards/readiness-types";
@@ -20,6 +21,11 @@ type WorkspaceProps = {
 
 /** The card as it will print, page under page, with its points as things to pick up and put down. */
 export function SheetWorkspace({ pages, points, selected, onSelect, findings, carried, readOnly = false, code = null }: WorkspaceProps) {
+  const here = useRef<HTMLDivElement>(null);
+  useEffect(() => {
+    const region = selected ? here.current?.querySelector(`[data-region="${selected}"]`) : null;
+    region?.scrollIntoView({ block: "nearest" });
+  }, [selected]);
   const slots = readOnly
     ? []
     : dropSlots(
@@ -27,7 +33,8 @@ export function SheetWorkspace({ pages, points, selected, onSelect, findings, ca
         points.map(({ id }) => id),
       );
   return (
-    <div className="mx-auto flex w-full max-w-[600px] flex-col gap-8">
+    <div ref={here} className="mx-auto flex w-full max-w-[600px] flex-col gap-8">
+      {points.length === 0 && !readOnly ? <EmptySheet carried={carried} /> : null}
       {pages.map((page) => (
         <section key={page.number} aria-label={`Page ${page.number} of ${page.of}`} className="relative bg-sheet shadow-sheet">
           <div className="paper">
@@ -60,7 +67,6 @@ export function SheetWorkspace({ pages, points, selected, onSelect, findings, ca
             ))}
         </section>
       ))}
-      {points.length === 0 && !readOnly ? <EmptySheet carried={carried} /> : null}
     </div>
   );
 }
@@ -94,7 +100,7 @@ function PointRegion({ page, region, point, index, selected, onSelect, open, rea
   };
   const name = `Point ${index + 1}, ${point.title}`;
   return (
-    <div ref={setNodeRef} className="absolute" style={box}>
+    <div ref={setNodeRef} className="absolute scroll-mt-20" style={box} data-region={region.part === 1 ? point.id : undefined}>
       <button
         type="button"
         aria-pressed={selected}

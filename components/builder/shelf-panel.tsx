@@ -73,7 +73,7 @@ export function ShelfPanel({ shelf, hazards, parameters, onCard, onPut }: ShelfP
         type="search"
         value={words}
         onChange={(event) => setWords(event.target.value)}
-        placeholder="Find by name, reading or hazard"
+        placeholder="Name, reading or hazard"
         aria-label="Find a test point"
         className={`${CONTROL} mt-3`}
       />

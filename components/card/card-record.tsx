@@ -91,7 +91,7 @@ export function CardRecord({ view }: { view: CardRecordView }) {
           answers={revision.answers}
           onAnswer={() => {}}
           onJump={jump}
-          facts={findings.length === 0 ? ["Nothing was found that should keep this card from release."] : []}
+          facts={findings.length === 0 ? [{ text: "Nothing was found that should keep this card from release.", well: true }] : []}
           readOnly
         />
         <Discussion cardId={card.id} comments={comments} points={points} selected={selected} may={may.comment} />

@@ -50,7 +50,7 @@ export function AbortEditor({ card, point, change, newId }: PointPartProps) {
             }
           />
         ) : (
-          <div key={line.id} className="flex items-end gap-2">
+          <div key={line.id} className="flex items-start gap-2 [&>button]:mt-6">
             <div className="flex-1">
               <TextField
                 label="Event"
@@ -167,7 +167,7 @@ function NumberLineEditor({ card, point, line, onChange, onRemove }: LineProps) 
         {instrument.gaugeName} {line.perMinute ? `change in ${windowS} s ` : ""}
         {line.side === "max" ? "at or above" : "at or below"}
       </legend>
-      <div className="grid grid-cols-[1fr_1fr_auto] items-end gap-2">
+      <div className="grid grid-cols-[1fr_1fr_auto] items-start gap-2 [&>button]:mt-6">
         <NumberField
           label="On the gauge"
           value={line.onGauge}

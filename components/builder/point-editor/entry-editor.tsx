@@ -41,7 +41,7 @@ export function EntryEditor({ card, point, change, newId }: PointPartProps) {
           );
         const name = card.programme.instruments.find(({ id }) => id === condition.instrument)?.gaugeName ?? condition.parameter;
         return (
-          <div key={condition.id} className="grid grid-cols-[1fr_1fr_1fr_auto] items-end gap-2">
+          <div key={condition.id} className="grid grid-cols-[1fr_1fr_1fr_auto] items-start gap-2 [&>button]:mt-6">
             <ChoiceField
               label={name}
               value={condition.relation}
@@ -136,7 +136,7 @@ export function StepEditor({ point, change, newId }: PointPartProps) {
         return (
           <fieldset key={step.id} className="border border-rule p-3">
             <legend className="px-1 text-ink-soft text-sm">Step {index + 1}</legend>
-            <div className="flex items-end gap-2">
+            <div className="flex items-start gap-2 [&>button]:mt-6">
               <div className="flex-1">
                 <TextField
                   label="Verb first"

@@ -1,3 +1,4 @@
+import { Refusal } from "../errors";
 import { defineUseCase } from "../use-case";
 import { openCard, refuseFindings, requireState, requireVersion, reviewNow, updateRevision } from "./internal";
 import { findingKey, openMusts, unanswered } from "./policy";
@@ -13,6 +14,8 @@ export const submitCard = defineUseCase({
     const { revision } = open;
     requireState(revision, "draft", "sent for review");
     requireVersion(revision, version);
+    if (revision.content.points.length === 0)
+      throw new Refusal("conflict", "This card has no test point. Put at least one on it before it goes to review.", "points");
     const findings = reviewNow(tx, ctx, open);
     refuseFindings(openMusts(findings), "Mend these before it goes to review");
     const kept = Object.fromEntries(

@@ -11,7 +11,7 @@ import { SORTIE_KINDS } from "@/lib/testcards/words";
 export function NewCardForm({ action }: { action: (state: FormState, form: FormData) => Promise<FormState> }) {
   const [state, send] = useActionState(action, EMPTY_FORM);
   return (
-    <form action={send} className="flex max-w-md flex-col gap-4">
+    <form action={send} noValidate className="flex max-w-md flex-col gap-4">
       <Field name="title" label="Title" hint="As it stands on the sheet, such as Climb cooling." required error={state.fieldErrors.title}>
         {(props) => <Input {...props} maxLength={80} defaultValue={state.values.title} />}
       </Field>

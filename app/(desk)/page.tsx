@@ -1,18 +1,16 @@
 import Link from "next/link";
-import { Badge, type BadgeTone } from "@/components/ui/badge";
+import { SortieStateBadge } from "@/components/sortie/sortie-state";
 import { EmptyState } from "@/components/ui/empty-state";
 import { PageHeader, Section } from "@/components/ui/page-header";
 import { Cell, HeadCell, Row, RowHead, Table, TableHead } from "@/components/ui/table";
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatDay } from "@/lib/format/time";
 import { countOf, sentenceCase } from "@/lib/format/words";
-import type { SortieState } from "@/lib/testcards/words";
 import { listProgrammes, type ProgrammeListItem } from "@/lib/workflow/programme/queries";
 import { listWaiting } from "@/lib/workflow/sortie/flight-line";
 import { listSorties, type SortieListItem } from "@/lib/workflow/sortie/queries";
 import { waitingLine } from "./waiting-words";
 
-const TONE: Record<SortieState, BadgeTone> = { planned: "blue", briefed: "yellow", flown: "yellow", debriefed: "green", closed: "plain" };
 const SHOWN_SORTIES = 6;
 
 export default async function FlightLinePage() {
@@ -101,7 +99,7 @@ function SortieTable({ sorties, address, more }: { sorties: SortieListItem[]; ad
               <Cell className="max-hand:hidden">{cards ?? "none"}</Cell>
               <Cell className="max-hand:hidden">{pilot ?? "not named"}</Cell>
               <Cell>
-                <Badge tone={TONE[state]}>{state}</Badge>
+                <SortieStateBadge state={state} />
               </Cell>
             </Row>
           ))}

@@ -43,6 +43,7 @@ export function CardBuilder(props: CardBuilderProps) {
   const [state, dispatch] = useReducer(build, null, () => startBuilder(props.content, props.version));
   const [side, setSide] = useState<Side>({ show: "findings" });
   const [pane, setPane] = useState<Pane>("sheet");
+  const [moved, setMoved] = useState<string | null>(null);
   const [carried, setCarried] = useState<Carried | null>(null);
   const [answers, setAnswers] = useState(props.answers);
   const focusNext = useRef<string | null>(null);
@@ -110,7 +111,10 @@ export function CardBuilder(props: CardBuilderProps) {
       onDragEnd={({ active, over }) => {
         setCarried(null);
         const drop = dropOf(active.data.current as Carried, over?.data.current?.at as number | undefined, content.points);
-        if (drop?.kind === "move") dispatch({ type: "move", point: drop.point, to: drop.to });
+        if (drop?.kind === "move") {
+          dispatch({ type: "move", point: drop.point, to: drop.to });
+          setMoved(drop.point);
+        }
         const template = drop?.kind === "insert" ? shelf.find(({ id }) => id === drop.template) : undefined;
         if (template && drop) put(template, drop.to);
       }}
@@ -182,6 +186,7 @@ export function CardBuilder(props: CardBuilderProps) {
             onSelect={(id) => show({ show: "point", point: id, section: "" })}
             findings={findings}
             carried={carried?.title ?? null}
+            moved={moved}
           />
         </div>
         <aside

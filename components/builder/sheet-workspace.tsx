@@ -16,16 +16,31 @@ type WorkspaceProps = {
   findings: Finding[];
   carried: string | null; // title of what is being dragged
   readOnly?: boolean;
+  moved?: string | null; // just put down: it keeps the focus on whichever page it lands
   code?: boolean[][] | null; // the released sheet's, as it prints
 };
 
 /** The card as it will print, page under page, with its points as things to pick up and put down. */
-export function SheetWorkspace({ pages, points, selected, onSelect, findings, carried, readOnly = false, code = null }: WorkspaceProps) {
+export function SheetWorkspace({
+  pages,
+  points,
+  selected,
+  onSelect,
+  findings,
+  carried,
+  readOnly = false,
+  code = null,
+  moved = null,
+}: WorkspaceProps) {
   const here = useRef<HTMLDivElement>(null);
   useEffect(() => {
     const region = selected ? here.current?.querySelector(`[data-region="${selected}"]`) : null;
     region?.scrollIntoView({ block: "nearest" });
   }, [selected]);
+  useEffect(() => {
+    if (!moved || document.activeElement !== document.body || pages.length === 0) return;
+    here.current?.querySelector<HTMLElement>(`[data-region="${moved}"] [data-handle]`)?.focus();
+  }, [moved, pages]);
   const slots = readOnly
     ? []
     : dropSlots(

@@ -29,15 +29,25 @@ export function useCardPaper({ programme, identity, content, context, state }: P
 
 const COUNTS = ["no", "one", "two", "three", "four", "five", "six"];
 
-function factsOf(card: ReturnType<typeof assembleCard>, pageCount: number): string[] {
-  const plan = planCard(card);
+/** What follows from the card so far; `well` is false where it will stand against the flight. */
+export type CardFact = { text: string; well: boolean };
+
+function factsOf(card: ReturnType<typeof assembleCard>, pageCount: number): CardFact[] {
+  if (card.content.points.length === 0) return [{ text: "No test point is on the card yet.", well: false }];
+  const { minutes, fuelRequiredL, takeOff, landing, zeroFuel } = planCard(card);
   const { fuelOnBoardL, bingoL } = card.content;
   const pointPages = pageCount - 1;
+  const outside = [takeOff, landing, zeroFuel].some((load) => load !== null && !load.inside);
+  const bingo = bingoL === null ? "" : `, bingo ${bingoL} L`;
+  const needed = Math.ceil(fuelRequiredL);
   return [
-    `Planned ${Math.floor(plan.minutes / 60)} h ${String(Math.round(plan.minutes % 60)).padStart(2, "0")}`,
-    ...(fuelOnBoardL !== null && plan.fuelRequiredL <= fuelOnBoardL
-      ? [`Fuel ${Math.ceil(plan.fuelRequiredL)} L of ${fuelOnBoardL} L${bingoL === null ? "" : `, bingo ${bingoL} L`}`]
-      : []),
-    `Cover and ${COUNTS[pointPages] ?? pointPages} ${pointPages === 1 ? "page" : "pages"}, A5`,
+    { text: `Planned ${Math.floor(minutes / 60)} h ${String(Math.round(minutes % 60)).padStart(2, "0")}`, well: true },
+    fuelOnBoardL === null
+      ? { text: `Fuel ${needed} L wanted, none stated`, well: false }
+      : { text: `Fuel ${needed} L of ${fuelOnBoardL} L${bingo}`, well: fuelRequiredL <= fuelOnBoardL },
+    outside
+      ? { text: "Mass or CG is outside the envelope: see Cover", well: false }
+      : { text: "Mass and CG inside the envelope", well: true },
+    { text: `Cover and ${COUNTS[pointPages] ?? pointPages} ${pointPages === 1 ? "page" : "pages"}, A5`, well: true },
   ];
 }

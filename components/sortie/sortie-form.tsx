@@ -14,13 +14,22 @@ import { Select } from "@/components/ui/select";
 import { type CardState, SORTIE_KINDS, type SortieKind } from "@/lib/testcards/words";
 import { PlanSortieInput } from "@/lib/workflow/sortie/schema";
 
-type Offered = { id: string; name: string; kind: string; revisionId: string; letter: string; state: CardState };
+type Offered = {
+  id: string;
+  name: string;
+  kind: string;
+  revisionId: string;
+  letter: string;
+  state: CardState;
+  loading: { crew: { role: string; massKg: number }[]; fuelOnBoardL: number | null; baggageKg: number };
+};
 type SortieFormProps = {
   programmeId: string;
   today: string;
   cards: Offered[];
   configurations: { id: string; number: string; isCurrent: boolean; signed: boolean }[];
   pilots: { id: string; name: string }[];
+  planned?: { id: string; version: number; values: Typed }; // to be changed; else a new one
 };
 
 type Typed = z.input<typeof PlanSortieInput>;
@@ -28,19 +37,19 @@ type Plan = z.output<typeof PlanSortieInput>;
 const asNumber = (value: unknown) => (value === "" || value === null || value === undefined ? null : Number(value));
 
 /** Kind, day, crew, configuration and cards, by the same schema as the server's. */
-export function SortieForm({ programmeId, today, cards, configurations, pilots }: SortieFormProps) {
+export function SortieForm({ programmeId, today, cards, configurations, pilots, planned }: SortieFormProps) {
   const router = useRouter();
   const key = useRef("");
   const [problem, setProblem] = useState<string | null>(null);
   const first = pilots[0];
-  const { register, control, handleSubmit, formState, setError, watch } = useForm<Typed, unknown, Plan>({
+  const { register, control, handleSubmit, formState, setError, setValue, getValues, watch } = useForm<Typed, unknown, Plan>({
     resolver: zodResolver(PlanSortieInput),
-    defaultValues: {
+    defaultValues: planned?.values ?? {
       programmeId,
       kind: "flight",
       plannedOn: today,
       configurationId: configurations.find(({ isCurrent }) => isCurrent)?.id ?? null,
-      crew: [{ userId: first?.id ?? null, name: first?.name ?? "", role: "pilot", massKg: 85 }],
+      crew: [{ userId: first?.id ?? null, name: first?.name ?? "", role: "pilot", massKg: Number.NaN }],
       revisionIds: [],
       settings: { baggageKg: 0, fuelOnBoardL: null, forecastOatC: null, dayPlan: { daylight: null, dutyTime: null, runway: null } },
     },
@@ -56,18 +65,33 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots }
     key.current ||= newId();
     setProblem(null);
     const { programmeId: _path, ...body } = plan;
-    const answer = await callApi<{ id: string }>(`/programmes/${programmeId}/sorties`, {
-      method: "POST",
-      body,
-      idempotencyKey: key.current,
-    });
-    if (answer.ok) return router.push(`/programmes/${programmeId}/sorties/${answer.body.id}`);
+    const sorties = `/programmes/${programmeId}/sorties`;
+    const answer = planned
+      ? await callApi<{ id: string }>(`/sorties/${planned.id}`, { method: "PATCH", body, ifMatch: planned.version })
+      : await callApi<{ id: string }>(sorties, { method: "POST", body, idempotencyKey: key.current });
+    if (answer.ok) {
+      router.push(`${sorties}/${answer.body.id}`);
+      return router.refresh();
+    }
     key.current = "";
-    setProblem(
-      answer.problem.status === 0 ? "No connection: nothing was planned. Your entries are kept; try again." : answer.problem.detail,
-    );
+    setProblem(answer.problem.status === 0 ? "No connection: nothing was saved. Your entries are kept; try again." : answer.problem.detail);
     for (const { path, message } of answer.problem.errors) setError(path as "kind", { message });
   });
+
+  /** The first card ticked says what it was planned with; what was typed already stays. */
+  const takeLoading = (revisionId: string, on: boolean) => {
+    const loading = cards.find((card) => card.revisionId === revisionId)?.loading;
+    const { crew: people, settings } = getValues();
+    if (!on || !loading || planned) return;
+    const seat = people[0];
+    if (seat && people.length === 1 && !Number.isFinite(Number(seat.massKg)))
+      setValue("crew", [
+        { ...seat, massKg: loading.crew[0]?.massKg ?? Number.NaN },
+        ...loading.crew.slice(1).map(({ role, massKg }) => ({ userId: null, name: role, role: "observer" as const, massKg })),
+      ]);
+    if (settings?.fuelOnBoardL === null) setValue("settings.fuelOnBoardL", loading.fuelOnBoardL);
+    if (settings?.baggageKg === 0) setValue("settings.baggageKg", loading.baggageKg);
+  };
 
   return (
     <form onSubmit={send} noValidate className="flex max-w-3xl flex-col gap-6">
@@ -104,7 +128,12 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots }
         {cards.length === 0 ? <p className="text-ink-soft">No cards yet. Build one first.</p> : null}
         {sorted.map(({ id, name, kind: cardKind, revisionId, letter, state }) => (
           <label key={id} className="flex min-h-11 items-center gap-3 border-rule border-b">
-            <input type="checkbox" value={revisionId} {...register("revisionIds")} className="size-5 accent-spine" />
+            <input
+              type="checkbox"
+              value={revisionId}
+              {...register("revisionIds", { onChange: (event) => takeLoading(revisionId, event.target.checked) })}
+              className="size-5 accent-spine"
+            />
             <span className="grow">
               {name}, rev {letter}
             </span>
@@ -157,7 +186,13 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots }
               )}
             </Field>
             <Field name={`crew.${index}.massKg`} label="Mass, kg" required error={errors.crew?.[index]?.massKg?.message}>
-              {(props) => <Input inputMode="numeric" {...props} {...register(`crew.${index}.massKg`, { setValueAs: asNumber })} />}
+              {(props) => (
+                <Input
+                  inputMode="numeric"
+                  {...props}
+                  {...register(`crew.${index}.massKg`, { setValueAs: (value) => asNumber(value) ?? Number.NaN })}
+                />
+              )}
             </Field>
             {index > 0 ? (
               <Button variant="quiet" className="self-end" onClick={() => crew.remove(index)}>
@@ -171,7 +206,7 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots }
             {errors.crew.root?.message ?? errors.crew.message}
           </p>
         ) : null}
-        <Button className="self-start" onClick={() => crew.append({ userId: null, name: "", role: "observer", massKg: 80 })}>
+        <Button className="self-start" onClick={() => crew.append({ userId: null, name: "", role: "observer", massKg: Number.NaN })}>
           Add an observer
         </Button>
       </fieldset>
@@ -198,7 +233,7 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots }
       </div>
       <FormMessage message={problem} />
       <Button type="submit" variant="main" className="self-start" disabled={isSubmitting}>
-        {isSubmitting ? "Planning …" : "Plan the sortie"}
+        {isSubmitting ? "Saving …" : planned ? "Save the change" : "Plan the sortie"}
       </Button>
     </form>
   );

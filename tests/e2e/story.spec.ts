@@ -106,6 +106,7 @@ async function mendAndSend(page: Page): Promise<void> {
   await page.getByLabel("Fuel on board, L").fill("60");
   await page.getByRole("button", { name: "Add a seat" }).click();
   await page.getByLabel("Mass, kg").fill(MASS_KG.pilot);
+  await page.getByRole("button", { name: "Add", exact: true }).click();
   await builder.tab(/^Before release/).click();
   await expect(builder.finding("bingo-low")).toBeHidden();
 
@@ -162,6 +163,7 @@ async function sendAgain(page: Page, address: string): Promise<void> {
   await builder.tab(/^Cover/).click();
   await page.getByRole("button", { name: "Add a seat" }).click();
   await page.getByLabel("Mass, kg").last().fill(MASS_KG.observer);
+  await page.getByRole("button", { name: "Add", exact: true }).click();
   await builder.saved();
   await builder.tab(/^Before release/).click();
   await page.getByRole("button", { name: "Send for review" }).click();

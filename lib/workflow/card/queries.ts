@@ -3,7 +3,7 @@ import type { Db, Tx } from "@/db/open";
 import { cardRevisions, cards, prints, reviewComments, signatures, users } from "@/db/schema";
 import type { Actor } from "@/lib/auth/roles";
 import { B612_WIDTHS } from "@/lib/testcards/b612-widths";
-import type { CardDocument, ProgrammeSnapshot } from "@/lib/testcards/card";
+import type { CardContent, CardDocument, ProgrammeSnapshot } from "@/lib/testcards/card";
 import { reviewCard } from "@/lib/testcards/readiness";
 import type { CardContext, Finding } from "@/lib/testcards/readiness-types";
 import type { SheetStamp } from "@/lib/testcards/sheet-types";
@@ -30,6 +30,10 @@ export function listCards(db: Reader, actor: Actor, programmeId: string) {
       kind: sql<string>`json_extract(${cardRevisions.content}, '$.kind')`,
       points: sql<number>`json_array_length(${cardRevisions.content}, '$.points')`,
       plannedOn: sql<string | null>`json_extract(${cardRevisions.content}, '$.plannedOn')`,
+      loading:
+        sql<string>`json_object('crew', json_extract(${cardRevisions.content}, '$.crew'), 'fuelOnBoardL', json_extract(${cardRevisions.content}, '$.fuelOnBoardL'), 'baggageKg', json_extract(${cardRevisions.content}, '$.baggageKg'))`.mapWith(
+          (text: string) => JSON.parse(text) as Pick<CardContent, "crew" | "fuelOnBoardL" | "baggageKg">,
+        ),
       authorName: users.name,
       updatedAt: cardRevisions.updatedAt,
       releasedAt: cardRevisions.releasedAt,

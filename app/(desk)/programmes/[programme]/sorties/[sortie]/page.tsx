@@ -10,6 +10,7 @@ import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatNumber } from "@/lib/format/number";
 import { formatDay, formatInstant } from "@/lib/format/time";
 import { countOf } from "@/lib/format/words";
+import { type LoadCase, planLoad } from "@/lib/testcards/card-plan";
 import { shortDigest } from "@/lib/workflow/card/policy";
 import { whoMay } from "@/lib/workflow/permissions";
 import { getProgramme } from "@/lib/workflow/programme/queries";
@@ -44,6 +45,10 @@ export default async function SortiePage({ params }: Props) {
             <a className={buttonClass("outline")} href={`/debrief/${id}`}>
               Debrief on the phone
             </a>
+          ) : may.change ? (
+            <Link className={buttonClass("outline")} href={`${here}/sorties/${id}/change`}>
+              Change the sortie
+            </Link>
           ) : null
         }
       />
@@ -113,21 +118,48 @@ function CardOfSortie({ card, index, sortieId, here, mayAnswer, open }: CardProp
   );
 }
 
-function Loading({ view: { crew, sortie } }: { view: SortieView }) {
+function Loading({ view: { crew, sortie, cards, plan } }: { view: SortieView }) {
   const { baggageKg, fuelOnBoardL, forecastOatC, dayPlan } = sortie.settings;
   const stated = (value: string | null) => value ?? "not stated";
-  return (
-    <Facts
-      items={[
-        ...crew.map(({ name, role, massKg }) => ({ term: `${role}, ${name}`, value: `${massKg} kg` })),
-        { term: "Baggage", value: `${formatNumber(baggageKg)} kg` },
-        { term: "Fuel on board", value: fuelOnBoardL === null ? "not stated" : `${formatNumber(fuelOnBoardL)} L` },
-        { term: "Configuration", value: sortie.configurationNumber ?? "not stated" },
-        { term: "Forecast outside air", value: forecastOatC === null ? "not stated" : `${formatNumber(forecastOatC)} °C` },
-        { term: "Daylight", value: stated(dayPlan.daylight) },
-        { term: "Duty time", value: stated(dayPlan.dutyTime) },
-        { term: "Runway", value: stated(dayPlan.runway) },
-      ]}
-    />
+  const programme = cards[0]?.document.programme;
+  const points = cards.flatMap(({ document }) => document.content.points);
+  const load = programme ? planLoad(programme, { kind: sortie.kind, crew: plan.crew, baggageKg, fuelOnBoardL, points }) : null;
+  const unlike = cards.filter(
+    ({ document: { content } }) => content.fuelOnBoardL !== null && fuelOnBoardL !== null && content.fuelOnBoardL !== fuelOnBoardL,
   );
+  return (
+    <>
+      <Facts
+        items={[
+          ...crew.map(({ name, role, massKg }) => ({ term: `${role}, ${name}`, value: `${massKg} kg` })),
+          { term: "Baggage", value: `${formatNumber(baggageKg)} kg` },
+          { term: "Fuel on board", value: fuelOnBoardL === null ? "not stated" : `${formatNumber(fuelOnBoardL)} L` },
+          { term: "Configuration", value: sortie.configurationNumber ?? "not stated" },
+          { term: "Forecast outside air", value: forecastOatC === null ? "not stated" : `${formatNumber(forecastOatC)} °C` },
+          { term: "Daylight", value: stated(dayPlan.daylight) },
+          { term: "Duty time", value: stated(dayPlan.dutyTime) },
+          { term: "Runway", value: stated(dayPlan.runway) },
+          ...(load
+            ? [
+                { term: "Fuel required", value: `${formatNumber(Math.ceil(load.fuelRequiredL))} L` },
+                { term: "Take-off mass and CG", value: loadWords(load.takeOff) },
+                { term: "Landing mass and CG", value: loadWords(load.landing) },
+                { term: "Zero-fuel mass and CG", value: loadWords(load.zeroFuel) },
+              ]
+            : []),
+        ]}
+      />
+      {unlike.map(({ number, letter, document: { content } }) => (
+        <p key={number} className="mt-3">
+          Card {number} rev {letter} prints {formatNumber(content.fuelOnBoardL ?? 0)} L on its cover, this sortie carries{" "}
+          {formatNumber(fuelOnBoardL ?? 0)} L.
+        </p>
+      ))}
+    </>
+  );
+}
+
+function loadWords(load: LoadCase | null): string {
+  if (!load) return "fuel not stated";
+  return `${formatNumber(load.massKg, 1)} kg, ${formatNumber(load.cgM, 3)} m, ${load.inside ? "inside" : "OUTSIDE the envelope"}`;
 }

@@ -36,6 +36,7 @@ type FigureProps = {
   unit?: Unit | null; // other than the field's own: the gauge was changed
   onUnit?: (unit: Unit | null) => void;
   hideLabel?: boolean;
+  units?: Unit[]; // to choose from, where not every unit of the kind makes sense
   mayChangeGauge?: boolean;
   beside?: ReactNode;
   under?: ReactNode;
@@ -50,6 +51,7 @@ export function FigureField({
   unit = null,
   onUnit,
   hideLabel = false,
+  units,
   mayChangeGauge = false,
   beside,
   under,
@@ -58,7 +60,7 @@ export function FigureField({
   const [choosing, setChoosing] = useState(false);
   const own = field.unit;
   const shown = unit ?? own;
-  const others = own ? ON_GAUGES.filter((one) => sameDimension(one, own)) : [];
+  const others = units ?? (own ? ON_GAUGES.filter((one) => sameDimension(one, own)) : []);
   return (
     <div>
       <div className="mb-1 flex items-baseline justify-between gap-3">
@@ -111,7 +113,7 @@ export function FigureField({
                   setChoosing(false);
                 }}
               >
-                {one === own ? unitLabel(one) : mayChangeGauge ? `Gauge changed: ${unitLabel(one)}` : unitLabel(one)}
+                {unitLabel(one)}
               </button>
             ))}
           </div>

@@ -69,7 +69,7 @@ export function FlightScreen(props: ScreenProps) {
             />
           ))}
         </div>
-        <Running {...props} />
+        {of("time").some(({ key }) => errors.has(key)) ? null : <Running {...props} />}
       </Panel>
       <Panel className="flex flex-col gap-4">
         <h3 className="font-bold">Fuel</h3>
@@ -83,6 +83,7 @@ export function FlightScreen(props: ScreenProps) {
               typed={draft.typed[field.key] ?? ""}
               error={errors.get(field.key)}
               unit={unit}
+              units={["L", "USgal", "impgal", "kg"]}
               onUnit={(next) => type(field, draft.typed[field.key] ?? "", next)}
               onType={(text) => type(field, text, unit)}
             />
@@ -111,7 +112,9 @@ export function FlightScreen(props: ScreenProps) {
               typed={draft.typed[field.key] ?? ""}
               error={errors.get(field.key)}
               unit={quantity?.unit ?? null}
-              {...(changeable ? { onUnit: (next) => type(field, draft.typed[field.key] ?? "", next) } : {})}
+              {...(changeable
+                ? { units: ["hPa" as const, "inHg" as const], onUnit: (next) => type(field, draft.typed[field.key] ?? "", next) }
+                : {})}
               onType={(text) => type(field, text, quantity?.unit ?? null)}
             />
           );

@@ -16,7 +16,9 @@ type ReadingProps = PointProps & { reading: Reading; own: DebriefField[]; lines:
 
 /** One reading as the card asked for it: figure, unit of the gauge, expected band, moment, verdict. */
 export function ReadingField(props: ReadingProps) {
-  const { card, point, reading, own, lines, draft, errors, change, type, shares } = props;
+  const { card, point, reading, own, draft, errors, change, type, shares } = props;
+  const refused = own.some(({ key }) => errors.has(key)); // a refused figure has no verdict
+  const lines = refused ? [] : props.lines;
   const instrument = instrumentOf(card, reading.instrument);
   const parameter = parameterOf(card, reading.parameter);
   const entry =
@@ -85,8 +87,8 @@ export function ReadingField(props: ReadingProps) {
 
 function expectedWords(field: DebriefField | undefined): string {
   const { low = null, high = null } = field?.expected ?? {};
-  const unit = field?.unit ? ` ${unitLabel(field.unit)}` : "";
-  if (low !== null && high !== null) return `, expected ${low} to ${high}${unit}`;
+  const unit = field?.unit ? `\u202f${unitLabel(field.unit)}` : "";
+  if (low !== null && high !== null) return `, expected ${low} to ${high}${unit}`;
   if (high !== null) return `, expected at most ${high}${unit}`;
   return low === null ? "" : `, expected at least ${low}${unit}`;
 }

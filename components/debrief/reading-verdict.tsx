@@ -3,7 +3,7 @@ import { ArcStrip } from "@/components/gauge/arc-strip";
 import { stripOf } from "@/components/gauge/reading-strip";
 import { VerdictMark } from "@/components/gauge/verdict-mark";
 import { formatMargin } from "@/lib/format/number";
-import { withUnit } from "@/lib/format/unit";
+import { unitLabel, withUnit } from "@/lib/format/unit";
 import type { Instrument, Parameter } from "@/lib/testcards/card";
 import type { CheckLine } from "@/lib/testcards/debrief-types";
 import { worst } from "@/lib/testcards/verdict";
@@ -14,7 +14,7 @@ export function judgedLines(lines: CheckLine[]): CheckLine[] {
 }
 
 export function ReadingMark({ lines }: { lines: CheckLine[] }) {
-  const judged = judgedLines(lines).filter(({ comparison, informationOnly }) => comparison !== "hot day, placard" || !informationOnly);
+  const judged = judgedLines(lines).filter(({ comparison, verdict }) => comparison !== "hot day, placard" || verdict !== "no verdict");
   if (judged.length === 0) return null;
   const verdict = worst(judged.map((line) => line.verdict));
   const reason = judged.find((line) => line.verdict === "no verdict")?.reasons[0] ?? null;
@@ -37,7 +37,14 @@ export function ReadingVerdict({
   const strip = stripOf(judged, main, parameter, instrument);
   return (
     <div className="mt-3" aria-live="polite">
-      {strip ? <ArcStrip title={parameter?.name ?? "Reading"} strip={strip} /> : null}
+      {strip ? (
+        <>
+          <ArcStrip title={parameter?.name ?? "Reading"} strip={strip} />
+          {main.limit ? (
+            <p className="text-ink-soft">Scale in {unitLabel(main.limit.unit)}. Open mark: on the gauge; filled: true; diamond: hot day.</p>
+          ) : null}
+        </>
+      ) : null}
       <p className="mt-1">
         {sentences(judged).join(" ")} <span className="text-ink-soft">Provisional until the engineer has reviewed.</span>
       </p>

@@ -8,10 +8,10 @@ import { Input } from "@/components/ui/input";
 import type { Finding } from "@/lib/testcards/readiness-types";
 import { findingKey } from "@/lib/workflow/card/policy";
 
-type BriefProps = { sortieId: string; lines: string[]; findings: Finding[]; may: boolean; briefed: boolean };
+type BriefProps = { sortieId: string; lines: string[]; findings: Finding[]; may: boolean; briefed: boolean; kept: Record<string, string> };
 
 /** What was found, answered in one line where it may stand, and the go/no-go lines ticked by the pilot. Any NO stops. */
-export function BriefForm({ sortieId, lines, findings, may, briefed }: BriefProps) {
+export function BriefForm({ sortieId, lines, findings, may, briefed, kept }: BriefProps) {
   const router = useRouter();
   const [ticked, setTicked] = useState<Set<string>>(new Set());
   const [answers, setAnswers] = useState<Record<string, string>>({});
@@ -27,7 +27,11 @@ export function BriefForm({ sortieId, lines, findings, may, briefed }: BriefProp
       body: { goNoGo: lines.map((line) => ({ line, go: ticked.has(line) })), answers },
     });
     setBusy(false);
-    if (!sent.ok) return setProblem(sent.problem.errors[0]?.message ?? sent.problem.detail);
+    if (!sent.ok) {
+      const open = ((sent.problem.findings ?? []) as Finding[]).map(({ message }) => message);
+      const said = sent.problem.errors[0]?.message ?? sent.problem.detail;
+      return setProblem(open.length > 0 ? `${said.split(":")[0]}: ${open.join(" ")}` : said);
+    }
     router.refresh();
   }
   const toggle = (line: string) =>
@@ -48,6 +52,7 @@ export function BriefForm({ sortieId, lines, findings, may, briefed }: BriefProp
               <FindingMark severity={finding.severity} />
               <div className="min-w-0 grow">
                 <p>{finding.message}</p>
+                {kept[findingKey(finding)] ? <p className="text-ink-soft text-sm">Answered: {kept[findingKey(finding)]}</p> : null}
                 {finding.severity === "should" && may && !briefed ? (
                   <Input
                     className="mt-2"

@@ -41,7 +41,7 @@ export default async function SortiePage({ params }: Props) {
             <Link className={buttonClass("main")} href={`${here}/sorties/${id}/results`}>
               Results
             </Link>
-          ) : may.debrief ? (
+          ) : may.debrief && sortie.state !== "planned" ? (
             <a className={buttonClass("outline")} href={`/debrief/${id}`}>
               Debrief on the phone
             </a>
@@ -69,6 +69,7 @@ export default async function SortiePage({ params }: Props) {
             findings={view.findings}
             may={may.brief}
             briefed={sortie.state === "briefed"}
+            kept={sortie.answers ?? {}}
           />
           {sortie.briefedAt ? (
             <p className="mt-3">
@@ -76,6 +77,13 @@ export default async function SortiePage({ params }: Props) {
               {sortie.briefedByName ? ` by ${sortie.briefedByName}` : ""}.
             </p>
           ) : null}
+        </Section>
+      ) : null}
+      {may.debrief && sortie.state === "planned" ? (
+        <Section id="flown" title="Flown already?" lead="What happened may always be entered, briefed or not.">
+          <a className={buttonClass("outline")} href={`/debrief/${id}`}>
+            Debrief on the phone
+          </a>
         </Section>
       ) : null}
       <Section id="loading" title="Crew and loading">

@@ -3,6 +3,7 @@ import { PrintSheet } from "@/components/builder/print-sheet";
 import { CardState } from "@/components/card/card-state";
 import { AnswerCard } from "@/components/sortie/answer-card";
 import { BriefForm } from "@/components/sortie/brief-form";
+import { LoadingForm } from "@/components/sortie/loading-form";
 import { SortieStateBadge } from "@/components/sortie/sortie-state";
 import { buttonClass } from "@/components/ui/button";
 import { Facts, PageHeader, Section } from "@/components/ui/page-header";
@@ -88,6 +89,12 @@ export default async function SortiePage({ params }: Props) {
       ) : null}
       <Section id="loading" title="Crew and loading">
         <Loading view={view} />
+        {open && may.answer ? (
+          <details className="mt-4">
+            <summary className="flex min-h-11 cursor-pointer items-center font-bold">Enter loading and the day’s plan</summary>
+            <LoadingForm key={sortie.version} sortieId={id} version={sortie.version} settings={sortie.settings} />
+          </details>
+        ) : null}
       </Section>
     </BinderPage>
   );

@@ -3,13 +3,13 @@ import { inkCoverHead, planCover } from "./sheet-layout/cover";
 import { inkFooter, inkHeader, inkWatermark, type Place, stateWord } from "./sheet-layout/page-frame";
 import { BLOCK_GAP_MM, type PagePlan, planPages, type Sheet, sheetOf } from "./sheet-layout/paginate";
 import { MOST_CELLS, PAPERS } from "./sheet-layout/paper";
-import { gridColumns } from "./sheet-layout/point-cells";
+import { cellsInRow } from "./sheet-layout/point-cells";
 import { type Ink, moved, shifted, unprintableLetters } from "./sheet-layout/typesetting";
 import type { FontWidths, SheetOverflow, SheetPage, SheetPaper, SheetRegion, SheetStamp } from "./sheet-types";
 import type { CardState } from "./words";
 
 /** Part of every cache key of a drawn sheet: raise it whenever the same card would be drawn otherwise. */
-export const SHEET_LAYOUT_VERSION = "2";
+export const SHEET_LAYOUT_VERSION = "3";
 
 export type SheetOptions = { paper: SheetPaper; state: CardState; widths: FontWidths; stamp?: SheetStamp | null };
 
@@ -106,7 +106,7 @@ export function sheetOverflow(card: CardDocument, widths: FontWidths, paper: She
 
 function tooManyCells(card: CardDocument, startsOn: ReadonlyMap<string, number>): SheetOverflow[] {
   return card.content.points.flatMap((point): SheetOverflow[] => {
-    const cells = gridColumns(card, point).length;
+    const cells = cellsInRow(point);
     if (cells <= MOST_CELLS) return [];
     const message = `The grid asks for ${cells} cells in a row. At most ${MOST_CELLS} fit: give the others to the recorder.`;
     return [{ point: point.id, page: startsOn.get(point.id) ?? null, message }];

@@ -7,7 +7,7 @@ import { textWidthMm } from "@/lib/testcards/sheet-layout/typesetting";
 import type { SheetItem, SheetPage } from "@/lib/testcards/sheet-types";
 import { CARD_STATES, type CardState } from "@/lib/testcards/words";
 import { BLANK_POINT, CHECK, CLIMB, SHUT, sheetCard, sheetReading } from "./support/sheet-card";
-import { lay, lines, type TextItem, texts } from "./support/sheet-lines";
+import { cells, lay, lines, type TextItem, texts } from "./support/sheet-lines";
 import { abortEvent, abortNumber } from "./support/sheet-programme";
 
 function box(item: SheetItem): { left: number; right: number; top: number; bottom: number } {
@@ -27,7 +27,6 @@ function box(item: SheetItem): { left: number; right: number; top: number; botto
   return { left: item.xMm, right: item.xMm + item.widthMm, top: item.yMm, bottom: item.yMm + item.heightMm };
 }
 
-const cells = (page: SheetPage) => page.items.filter((i) => i.kind === "cell");
 const PAPER = { a5: { width: 148, height: 210, cellW: 20, cellH: 10 }, "half-letter": { width: 140, height: 216, cellW: 18, cellH: 9 } };
 
 describe("the climb of eleven rows", () => {

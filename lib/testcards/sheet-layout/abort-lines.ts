@@ -36,6 +36,6 @@ export function abortList(card: CardDocument, point: CardPoint): AbortList {
 }
 
 /** Points with the same key may share a page, for a page carries one abort list and one THEN line. */
-export function pageKey(card: CardDocument, point: CardPoint): string {
-  return JSON.stringify([point.place, abortList(card, point)]);
+export function pageKey(point: CardPoint, aborts: AbortList): string {
+  return JSON.stringify([point.place, aborts]);
 }

@@ -82,12 +82,13 @@ function inkFigure(ink: Ink, { label, value, boxed }: CoverFigure, xMm: number, 
 /** Lines with a box to tick before each. */
 export function goNoGoBlock(card: CardDocument, body: Body, widthMm: number, widths: FontWidths): Block {
   const ink: Ink = [];
-  const tickMm = 3.4;
+  const tickMm = Math.min(3.4, body.pitchMm - 0.8); // boxes that touch are ticked for one another
+  const textMm = 5.8;
   let y = 0;
   for (const text of card.programme.goNoGo) {
-    const lines = setLines([regular(text)], widthMm - tickMm - 2.4, body.sizePt, widths);
+    const lines = setLines([regular(text)], widthMm - textMm, body.sizePt, widths);
     inkBox(ink, { xMm: 0.2, yMm: y + (body.pitchMm - tickMm) / 2, widthMm: tickMm, heightMm: tickMm }, RULE_MM, ROLE);
-    y += inkLines(ink, lines, tickMm + 2.4, y, body.pitchMm, { sizePt: body.sizePt, role: ROLE });
+    y += inkLines(ink, lines, textMm, y, body.pitchMm, { sizePt: body.sizePt, role: ROLE });
   }
   return section([bold("GO / NO-GO"), regular("  any NO stops")], { ink, heightMm: y }, widthMm, widths);
 }

@@ -86,7 +86,7 @@ function wordFor({ limit, word }: Unproved): string {
 }
 
 function sided({ limit, gauge }: Row, unit: Unit): string {
-  return `${limit.side === "min" ? "min " : ""}${withUnit(figure(gauge, unit), unit)}`;
+  return `${limit.side === "min" ? "min\u00a0" : ""}${withUnit(figure(gauge, unit), unit)}`;
 }
 
 const onlyMaxima = ({ plain, unproved }: Gauged) => plain.low === null && plain.high !== null && unproved.length === 0;

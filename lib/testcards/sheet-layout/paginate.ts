@@ -1,11 +1,11 @@
-import type { CardDocument, CardPoint } from "../card";
+import type { CardDocument, CardPoint, Reading } from "../card";
 import type { FontWidths, SheetPaper, SheetStamp } from "../sheet-types";
 import { abortList, pageKey } from "./abort-lines";
 import { limitLines } from "./limit-lines";
 import { listBlock } from "./list-block";
 import { footerHeightMm, inkHeader } from "./page-frame";
 import { type Frame, RULE_MM, usableFrame } from "./paper";
-import { gridBlocks, outcomeBlock, singleBlocks } from "./point-cells";
+import { gridBlocks, isReadFirst, outcomeBlock, singleBlocks } from "./point-cells";
 import { type Block, leadBlocks, titleBlock } from "./point-lead";
 import { type Ink, moved, shifted } from "./typesetting";
 
@@ -40,7 +40,18 @@ export function sheetOf(card: CardDocument, paper: SheetPaper, stamp: SheetStamp
   return { card, paper, stamp, widths, frame, headerMm, footerMm: footerHeightMm(card, stamp, frame, widths) };
 }
 
-function wholeOf(sheet: Sheet, point: CardPoint, index: number): Whole {
+/** What the foot calls single readings that stand on the next page: by name where they are read before the grid, lest they be missed. */
+function singlesName(point: CardPoint): string {
+  const singles = point.readings.filter((r) => r.onSheet === "single");
+  const names = singles.map((r) => r.label).join(", ");
+  return singles.every(isReadFirst) && names.length <= LONGEST_NAMES ? names : "";
+}
+
+const FIRST_PAGE_ROWS = 5;
+const LONGEST_NAMES = 36; // the foot's note has one line
+
+/** A point's parts in the order in which they are read, unless that would cost the first page one of five rows of the grid. */
+function wholeOf(sheet: Sheet, point: CardPoint, index: number, roomMm: number): Whole {
   const { card, paper, widths, frame } = sheet;
   const across = { paper, widthMm: frame.widthMm, widths };
   const member =
@@ -49,16 +60,21 @@ function wholeOf(sheet: Sheet, point: CardPoint, index: number): Whole {
   const rows = gridBlocks(card, point, across).flatMap(({ head, rows, labels }) =>
     rows.map((block, i): Member => ({ kind: "row", block, head, label: labels[i] ?? "" })),
   );
-  return {
-    point,
-    numberOnCard: index + 1,
-    members: [
-      ...leadBlocks(card, point, frame.widthMm, widths).map(member("lead")),
-      ...rows,
-      ...singleBlocks(card, point, across).map(member("single")),
-      member("outcome")(outcomeBlock(frame.widthMm)),
-    ],
-  };
+  const leads = leadBlocks(card, point, frame.widthMm, widths).map(member("lead"));
+  const singles = (wanted: (reading: Reading) => boolean) => singleBlocks(card, point, across, wanted).map(member("single"));
+  const outcome = member("outcome")(outcomeBlock(frame.widthMm));
+  const whole = (members: Member[]): Whole => ({ point, numberOnCard: index + 1, members });
+  const label = singlesName(point);
+  const after = whole([...leads, ...rows, ...singles(() => true).map((single) => ({ ...single, label })), outcome]);
+  if (rows.length === 0 || !point.readings.some(isReadFirst)) return after;
+  const first = whole([...leads, ...singles(isReadFirst), ...rows, ...singles((reading) => !isReadFirst(reading)), outcome]);
+  const kept = Math.min(FIRST_PAGE_ROWS, rowsOnFirstPage(sheet, after, roomMm));
+  return rowsOnFirstPage(sheet, first, roomMm) < kept ? after : first;
+}
+
+function rowsOnFirstPage({ frame, widths }: Sheet, { numberOnCard, point, members }: Whole, roomMm: number): number {
+  const title = titleBlock(numberOnCard, point, false, frame.widthMm, widths);
+  return members.slice(0, takes(title.heightMm, members, roomMm)).filter((m) => m.kind === "row").length;
 }
 
 const LEAD_AIR_MM = 0.5;
@@ -101,19 +117,31 @@ function drawPart(sheet: Sheet, whole: Whole, part: number, members: readonly Me
     y += member.block.heightMm;
   }
   ink.push({ kind: "rect", xMm: 0, yMm: 0, widthMm: frame.widthMm, heightMm: y, strokeMm: RULE_MM, filled: false, role: "point" });
-  return { point: whole.point, part, parts: 1, ink, heightMm: y, rest: restWords(whole.members, rest) };
+  return { point: whole.point, part, parts: 1, ink, heightMm: y, rest: restWords(rest) };
+}
+
+const LONGEST_LABEL = 8;
+
+/** Rows by the names they carry on the sheet, for a pilot looks for those; by their count where the names are long or none. */
+function rowWords(labels: readonly string[]): string[] {
+  const [first = "", last = first] = [labels[0], labels.at(-1)];
+  if (labels.length === 0) return [];
+  const named = [first, last].every((label) => label.trim() !== "" && label.length <= LONGEST_LABEL);
+  if (labels.length === 1) return [named ? `row ${first}` : "1 row"];
+  return [named ? `rows ${first} to ${last}` : `${labels.length} rows`];
 }
 
 /** "rows 6 to 11 and the outcome boxes": what the reader finds on the next page. */
-function restWords(all: readonly Member[], rest: readonly Member[]): string {
+function restWords(rest: readonly Member[]): string {
   if (rest.length === 0) return "";
-  const rows = all.filter((m) => m.kind === "row");
   const left = rest.filter((m) => m.kind === "row");
-  const first = rows.indexOf(left[0] as Member) + 1;
   const words = [
     ...(rest.some((m) => m.kind === "lead") ? ["the rest of the steps"] : []),
-    ...(left.length === 1 ? [`row ${first}`] : left.length > 1 ? [`rows ${first} to ${rows.length}`] : []),
-    ...(rest.some((m) => m.kind === "single") ? ["the single readings"] : []),
+    ...rowWords(left.map((m) => m.label)),
+    ...rest
+      .filter((m) => m.kind === "single")
+      .slice(0, 1)
+      .map((m) => m.label || "the single readings"),
     "the outcome boxes",
   ];
   return words.length === 1 ? (words[0] ?? "") : `${words.slice(0, -1).join(", ")} and ${words.at(-1)}`;
@@ -134,11 +162,12 @@ export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[]
   const all = card.content.points;
   const limitsOf = limitLines(card);
   const fixedMm = sheet.headerMm + HEAD_GAP_MM + LIST_GAP_MM + FOOT_GAP_MM + sheet.footerMm;
-  const keys = new Map(all.map((point) => [point, pageKey(card, point)]));
+  const abortsOf = new Map(all.map((point) => [point, abortList(card, point)]));
+  const keys = new Map([...abortsOf].map(([point, aborts]) => [point, pageKey(point, aborts)]));
   const blank = (points: CardPoint[]): PagePlan => {
     const [first] = points;
     const then = first?.place === "ground" ? card.programme.thenLine.ground : card.programme.thenLine.air;
-    const aborts = first ? abortList(card, first) : { ifReached: false, lines: [], events: [] };
+    const aborts = (first && abortsOf.get(first)) ?? { ifReached: false, lines: [], events: [] };
     const list = listBlock(limitsOf(points), aborts, then, frame.widthMm, widths);
     return { parts: [], points, list, roomMm: frame.heightMm - fixedMm - list.heightMm };
   };
@@ -157,9 +186,9 @@ export function planPages(sheet: Sheet): { pages: PagePlan[]; trouble: Trouble[]
   };
 
   for (const [index, point] of all.entries()) {
-    const whole = wholeOf(sheet, point, index);
-    const titleMm = (part: number) => titleBlock(whole.numberOnCard, point, part > 1, frame.widthMm, widths).heightMm;
     const fresh = blank([point]);
+    const whole = wholeOf(sheet, point, index, fresh.roomMm);
+    const titleMm = (part: number) => titleBlock(whole.numberOnCard, point, part > 1, frame.widthMm, widths).heightMm;
     let members = whole.members;
     const together = joined(point);
     const here = together === null ? 0 : takes(titleMm(1), members, together.roomMm - usedMm(together));

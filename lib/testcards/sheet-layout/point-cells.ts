@@ -24,8 +24,9 @@ import {
 const HEAD_PITCH_MM = 3.9;
 const HEAD_LEAST_MM = 8;
 const CELL_PAD_MM = 0.5;
+const HEAD_PAD_MM = 0.35; // a band of two decimals then stands unbroken over the least cell of six on half letter
 
-export type Column = { reading: Reading | null; head: string; sub: string };
+type Column = { reading: Reading | null; head: string; sub: string };
 export type GridBlocks = { head: Block; rows: Block[]; labels: string[] };
 type Across = { paper: SheetPaper; widthMm: number; widths: FontWidths };
 
@@ -44,7 +45,12 @@ function headWithUnit(head: string, reading: Reading): string {
   return symbol === "" ? head : `${head} ${symbol}`;
 }
 
-export function gridColumns(card: CardDocument, point: CardPoint): Column[] {
+/** How many cells a row of the grid asks for. */
+export function cellsInRow(point: CardPoint): number {
+  return (point.grid?.timeColumn ? 1 : 0) + point.readings.filter((r) => r.onSheet === "grid").length;
+}
+
+function gridColumns(card: CardDocument, point: CardPoint): Column[] {
   const time: Column[] = point.grid?.timeColumn ? [{ reading: null, head: "time", sub: "mm:ss" }] : [];
   const readings = point.readings.filter((r) => r.onSheet === "grid");
   return [
@@ -69,13 +75,13 @@ function centred(
   }
 }
 
-const linesIn = (runs: Run[][], widthMm: number, widths: FontWidths) =>
-  runs.flatMap((run) => setLines(run, widthMm - 2 * CELL_PAD_MM, LABEL_PT, widths));
+const linesIn = (runs: Run[][], widthMm: number, widths: FontWidths, padMm = CELL_PAD_MM) =>
+  runs.flatMap((run) => setLines(run, widthMm - 2 * padMm, LABEL_PT, widths));
 
 /** A row of labelled heads: what is written below, its unit and what is expected there. */
 function headRow(heads: readonly { xMm: number; widthMm: number; runs: Run[][] }[], widths: FontWidths): Block {
   const ink: Ink = [];
-  const set = heads.map((head) => ({ ...head, lines: linesIn(head.runs, head.widthMm, widths) }));
+  const set = heads.map((head) => ({ ...head, lines: linesIn(head.runs, head.widthMm, widths, HEAD_PAD_MM) }));
   const heightMm = Math.max(HEAD_LEAST_MM, Math.max(0, ...set.map((h) => h.lines.length)) * HEAD_PITCH_MM + 0.2);
   for (const { xMm, widthMm, lines } of set) {
     inkBox(ink, { xMm, yMm: 0, widthMm, heightMm }, HAIRLINE_MM, "grid");
@@ -205,10 +211,15 @@ function singleRow(singles: readonly Single[], inRow: number, across: Across): B
   return { ink, heightMm };
 }
 
+/** A least value that must be reached before the power is set is read before the first row of the grid; the others may come later. */
+export function isReadFirst({ sampling, conditions, onSheet }: Reading): boolean {
+  return onSheet === "single" && sampling === "lowest" && conditions.some((c) => c === "full power" || c === "take-off");
+}
+
 /** Rows of labelled cells; neighbours that allow it share a row. */
-export function singleBlocks(card: CardDocument, point: CardPoint, across: Across): Block[] {
+export function singleBlocks(card: CardDocument, point: CardPoint, across: Across, wanted: (reading: Reading) => boolean): Block[] {
   const rows: { singles: Single[]; inRow: number }[] = [];
-  let rest = singlesOf(card, point);
+  let rest = singlesOf(card, point).filter(({ reading }) => wanted(reading));
   while (rest.length > 0) {
     const inRow = [3, 2, 1].find((n) => n <= rest.length && singlesAcross(rest.slice(0, n), across) === n) ?? 1;
     rows.push({ singles: rest.slice(0, inRow), inRow });

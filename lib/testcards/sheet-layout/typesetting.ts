@@ -16,7 +16,7 @@ export function capHeightMm(sizePt: number): number {
 /** A sheet of twelve points holds some 1500 texts; a change to a card leaves nearly all of them as they were. */
 const MOST_REMEMBERED = 6000;
 const printed = new Map<string, string>();
-const measured = new WeakMap<FontWidths, Map<string, number>>();
+const measured = { regular: new WeakMap<FontWidths, Map<string, number>>(), bold: new WeakMap<FontWidths, Map<string, number>>() };
 const broken = new WeakMap<FontWidths, Map<string, readonly SetLine[]>>();
 
 /** What was worked out before for the same key: text alone decides the answer, so it is never stale. */
@@ -30,7 +30,9 @@ function remembered<T>(memory: Map<string, T>, key: string, work: () => T): T {
 }
 
 function memoryOf<T>(memories: WeakMap<FontWidths, Map<string, T>>, widths: FontWidths): Map<string, T> {
-  const memory = memories.get(widths) ?? new Map<string, T>();
+  const known = memories.get(widths);
+  if (known) return known;
+  const memory = new Map<string, T>();
   memories.set(widths, memory);
   return memory;
 }
@@ -69,7 +71,7 @@ export function unprintableLetters(text: string, widths: FontWidths): string[] {
 }
 
 export function textWidthMm(text: string, weight: FontWeight, sizePt: number, widths: FontWidths): number {
-  const perMille = remembered(memoryOf(measured, widths), `${weight} ${text}`, () => {
+  const perMille = remembered(memoryOf(measured[weight], widths), text, () => {
     let sum = 0;
     for (const letter of text) sum += widths[weight][letter.codePointAt(0) ?? 0] ?? widths.missing;
     return sum;

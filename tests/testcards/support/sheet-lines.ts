@@ -26,3 +26,5 @@ export function lines(page: SheetPage, role: TextItem["role"]): string[] {
       .replace(/ +/g, " "),
   );
 }
+
+export const cells = (page: SheetPage) => page.items.filter((i) => i.kind === "cell");

@@ -10,6 +10,7 @@ const LEAST_DECIMALS: Partial<Record<Unit, number>> = { inHg: 1, bar: 1 };
 /** A figure as printed: no more decimals than it has, with a real minus sign. */
 export function figure(value: number, unit: Unit | null, mostDecimals = 2): string {
   const least = unit === null ? 0 : (LEAST_DECIMALS[unit] ?? 0);
+  if (least === 0 && Number.isSafeInteger(value) && value >= 0) return `${value}`;
   const exact = Number(value.toFixed(mostDecimals));
   const decimals = exact.toString().split(".")[1]?.length ?? 0;
   return exact.toFixed(Math.max(decimals, least)).replace("-", "−");

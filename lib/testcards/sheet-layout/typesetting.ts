@@ -67,7 +67,9 @@ export function printable(text: string): string {
 
 /** Letters that the typeface lacks; they would print as an empty box. */
 export function unprintableLetters(text: string, widths: FontWidths): string[] {
-  return [...new Set(printable(text))].filter((letter) => widths.regular[letter.codePointAt(0) ?? 0] === undefined);
+  const lacking = new Set<string>();
+  for (const letter of printable(text)) if (widths.regular[letter.codePointAt(0) ?? 0] === undefined) lacking.add(letter);
+  return [...lacking];
 }
 
 export function textWidthMm(text: string, weight: FontWeight, sizePt: number, widths: FontWidths): number {

@@ -1,5 +1,6 @@
 "use client";
 import { useEffect, useState } from "react";
+import { formatInstant } from "@/lib/format/time";
 import { DEBRIEF_CAUTION } from "@/lib/testcards/words";
 import { DebriefForm } from "./debrief-form";
 import { type DraftStore, useLoadedDebrief } from "./use-debrief";
@@ -44,12 +45,12 @@ export function DebriefApp({ store }: { store: DraftStore }) {
       </Message>
     );
   const { pack, draft } = loaded;
-  if (pack.submitted && !draft.sentAt)
+  if (pack.submitted)
     return (
-      <Message title="Already debriefed">
+      <Message title={pack.submitted.by === pack.me.name ? "Sent" : "Already debriefed"}>
         <p>
-          {pack.submitted.by} sent the debrief of sortie {pack.sortie.number}. Its readings are locked; the engineer can amend them with a
-          reason.
+          {pack.submitted.by} sent the debrief of sortie {pack.sortie.number} on {formatInstant(pack.submitted.submittedAt)}. Its readings
+          are locked.
         </p>
         <Way href={`/programmes/${pack.sortie.programmeId}/sorties/${pack.sortie.id}/results`}>Results</Way>
       </Message>

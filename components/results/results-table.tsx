@@ -12,7 +12,7 @@ export function ResultsTable({ label, rows }: { label: string; rows: ResultRow[]
       <div className="hidden hand:block">
         <Table label={label}>
           <TableHead>
-            <HeadCell>Reading</HeadCell>
+            <HeadCell className="min-w-48">Reading</HeadCell>
             <HeadCell figures>On the gauge</HeadCell>
             <HeadCell figures>True ±U</HeadCell>
             <HeadCell>As flown, to card</HeadCell>

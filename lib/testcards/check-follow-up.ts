@@ -152,7 +152,11 @@ function pointFindings(point: CardPoint, debrief: Debrief, lines: readonly Check
       .map((line) => line.reading),
   );
   const unusual = [...strange].map((reading) =>
-    at("outside-normal", `${label(reading)} is inside its limit but outside its normal range: answer in one line.`, reading),
+    at(
+      "outside-normal",
+      `${label(reading)} is inside its limit but outside its normal range, as flown or on the hot day: say why in the line of the step decision.`,
+      reading,
+    ),
   );
   return [...condition, ...surprising, ...changed, ...unusual];
 }

@@ -28,7 +28,7 @@ export default async function ResultsPage({ params, searchParams }: Props) {
   const { sortie, debrief, checks, versions, may } = results;
   const here = `/programmes/${programme}/sorties/${id}`;
   return (
-    <BinderPage>
+    <BinderPage wide>
       <PageHeader
         title={`Results of sortie ${sortie.number}`}
         badge={<SortieStateBadge state={sortie.state} />}

@@ -22,7 +22,7 @@ export function StepSection({ results: { sortie, checks, decisions, may: mayHere
     <Section
       id="steps"
       title="May the next step be flown?"
-      lead="The engineer proposes what was computed, or something stricter. It stands when a reviewer countersigns; anybody on the team may hold."
+      lead="The engineer proposes what was computed, or something stricter. It stands when a reviewer countersigns; an engineer, a reviewer, a pilot or a mechanic may hold."
     >
       <ul>
         {decisions.map((step) => (

@@ -143,14 +143,14 @@ test("the phone refuses what no gauge shows, keeps it as typed, and a stopwatch 
   await expect(phone.reading("Coolant, highest").getByRole("alert")).toBeVisible();
   await phone.readings({ "Coolant, highest": "-5" });
   await expect(phone.reading("Coolant, highest").getByRole("alert")).toContainText("possible are 0 to 130");
-  await page.getByLabel("Comment", { exact: true }).fill(`${EMOJI} ${SCRIPT}`);
+  await page.getByRole("textbox", { name: "Comment", exact: true }).fill(`${EMOJI} ${SCRIPT}`);
   await page.getByRole("button", { name: "Screen 5, Look over" }).click();
   await page.getByRole("button", { name: "Send the debrief" }).click();
   await expect(page.getByText("Mend what stands above first. Everything you typed is kept.")).toBeVisible();
   await page.reload();
   await page.getByRole("button", { name: "Screen 3, Taxi cooling, downwind" }).click();
   await expect(phone.reading("Coolant, highest").getByLabel("Coolant, highest")).toHaveValue("-5");
-  await expect(page.getByLabel("Comment", { exact: true })).toHaveValue(`${EMOJI} ${SCRIPT}`);
+  await expect(page.getByRole("textbox", { name: "Comment", exact: true })).toHaveValue(`${EMOJI} ${SCRIPT}`);
   expect(await planted(page)).toBe(false);
 });
 

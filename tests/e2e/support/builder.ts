@@ -32,7 +32,7 @@ export function builderOf(page: Page) {
     point: (number: number, title: string) =>
       page.getByRole("button", { name: new RegExp(`^Point ${number}, ${title}(, part 1 of \\d)?: edit$`) }),
     mover: (number: number, title: string) => page.getByRole("button", { name: `Point ${number}, ${title}: move`, exact: true }),
-    section: (title: string) => page.getByTestId("point-editor").getByRole("button", { name: new RegExp(`^${title}`) }),
+    section: (title: string) => page.getByTestId("point-editor").getByRole("button", { name: new RegExp(`^${title}(?!:)`) }),
     tab: (name: RegExp) => page.getByRole("tab", { name }),
     finding: (code: string) => page.locator(`[data-finding="${code}"]`),
     async saved() {

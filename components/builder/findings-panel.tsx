@@ -14,14 +14,15 @@ type PanelProps = {
   onJump: (finding: Finding) => void;
   facts: CardFact[];
   readOnly?: boolean;
+  title?: string;
 };
 
-export function FindingsPanel({ findings, answers, onAnswer, onJump, facts, readOnly = false }: PanelProps) {
+export function FindingsPanel({ findings, answers, onAnswer, onJump, facts, readOnly = false, title = "Before release" }: PanelProps) {
   const must = findings.filter(({ severity }) => severity === "must");
   const should = findings.filter(({ severity }) => severity === "should");
   return (
     <section aria-label="Before release">
-      <h2 className="font-bold text-lg">Before release</h2>
+      <h2 className="font-bold text-lg">{title}</h2>
       <p className="mb-2 text-sm text-ink-soft" aria-live="polite" data-testid="finding-count">
         {must.length} must, {should.length} should
       </p>

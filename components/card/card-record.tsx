@@ -12,6 +12,7 @@ import type { SheetStamp } from "@/lib/testcards/sheet-types";
 import type { CardState } from "@/lib/testcards/words";
 import { CardDecisions } from "./card-decisions";
 import { Discussion, type Remark } from "./discussion";
+import { RisksAndChanges } from "./risks-and-changes";
 
 export type CardRecordView = {
   card: { id: string; number: string };
@@ -21,6 +22,8 @@ export type CardRecordView = {
     state: CardState;
     version: number;
     answers: Record<string, string>;
+    authorName: string;
+    submittedAt: string | null;
     endedWhy: string | null;
     endedAt: string | null;
   };
@@ -28,6 +31,7 @@ export type CardRecordView = {
   digest: string;
   findings: Finding[];
   comments: Remark[];
+  differences: { point: string; parts: string[] }[]; // from the shelf as it is now
   stamp: SheetStamp | null;
   code: boolean[][] | null;
   may: Record<"edit" | "submit" | "comment" | "return" | "release" | "withdraw" | "revise" | "print", boolean>;
@@ -35,7 +39,7 @@ export type CardRecordView = {
 
 /** A revision that is not being written: the sheet as it prints, what was found, what was said, and what may be done. */
 export function CardRecord({ view }: { view: CardRecordView }) {
-  const { card, revision, document, digest, findings, comments, stamp, code, may } = view;
+  const { card, revision, document, digest, findings, comments, differences, stamp, code, may } = view;
   const [selected, setSelected] = useState<string | null>(null);
   const pages = useMemo(
     () => layOutSheet(document, { paper: "a5", state: revision.state, widths: B612_WIDTHS, stamp }),
@@ -61,6 +65,10 @@ export function CardRecord({ view }: { view: CardRecordView }) {
         />
       </div>
       <aside className="flex flex-col gap-6 border-rule bg-sheet p-4 wide:border-s">
+        <p>
+          Written by {revision.authorName}
+          {revision.submittedAt ? `, sent for review ${formatInstant(revision.submittedAt)}` : ""}.
+        </p>
         {stamp ? (
           <p>
             Released by {stamp.name} ({stamp.role}), {formatInstant(stamp.at)}.<br />
@@ -93,7 +101,9 @@ export function CardRecord({ view }: { view: CardRecordView }) {
           onJump={jump}
           facts={findings.length === 0 ? [{ text: "Nothing was found that should keep this card from release.", well: true }] : []}
           readOnly
+          title={frozen ? "Found at release" : "Before release"}
         />
+        <RisksAndChanges document={document} differences={differences} />
         <Discussion cardId={card.id} comments={comments} points={points} selected={selected} may={may.comment} />
       </aside>
     </div>

@@ -73,6 +73,9 @@ export function DebriefForm({ pack, first, store }: { pack: DebriefPack; first: 
       <header className="bg-spine px-4 py-3 text-spine-ink">
         <div className="flex justify-between gap-3">
           <h1>
+            <a href={`/programmes/${pack.sortie.programmeId}/sorties/${pack.sortie.id}`} className="me-2 underline underline-offset-4">
+              Leave
+            </a>
             {pack.cards.map(({ document }) => `Card ${document.identity.number} rev ${document.identity.letter}`).join(", ")} · sortie{" "}
             {pack.sortie.number}
           </h1>

@@ -2,10 +2,12 @@
 import { useState } from "react";
 import { v7 as newId } from "uuid";
 import { VerdictMark } from "@/components/gauge/verdict-mark";
-import type { CheckReport } from "@/lib/testcards/debrief-types";
+import { RawDebrief } from "@/components/results/raw-debrief";
+import type { CheckReport, Debrief, DebriefField } from "@/lib/testcards/debrief-types";
 import { validateDebrief } from "@/lib/testcards/validate-debrief";
 import { Choices, Panel, Problem, Words, YES_NO } from "./controls";
 import type { ScreenProps } from "./debrief-form";
+import { fieldValue } from "./field-value";
 
 /** Anything seen that a mechanic should look at; a person decides how serious it is. */
 export function SquawkScreen({ draft, change }: ScreenProps) {
@@ -72,7 +74,7 @@ type LookOverProps = ScreenProps & {
 };
 
 /** Everything once more before it locks: what is missing, what is wrong, how each point stands. */
-export function LookOverScreen({ pack, draft, errors, reports, screens, go, onSend, sending, problem }: LookOverProps) {
+export function LookOverScreen({ pack, draft, fields, errors, reports, screens, go, onSend, sending, problem }: LookOverProps) {
   const [tried, setTried] = useState(false);
   const complete = pack.cards.flatMap(({ document }) => validateDebrief(document, draft.debrief, { complete: true }));
   const revisions = pack.cards
@@ -83,7 +85,8 @@ export function LookOverScreen({ pack, draft, errors, reports, screens, go, onSe
     }));
   const wrong = new Map([...revisions, ...complete].map(({ key, message }) => [key, message]));
   for (const [key, message] of errors) wrong.set(key, message);
-  const empty = emptyReadings(pack, draft.debrief);
+  const empty = leftEmpty(fields, draft.debrief);
+  const blank = draft.debrief.squawks.filter(({ text }) => text.trim() === "").length;
   return (
     <div className="flex flex-col gap-5">
       <h2 className="font-bold text-xl">Look over</h2>
@@ -135,12 +138,21 @@ export function LookOverScreen({ pack, draft, errors, reports, screens, go, onSe
           </Panel>
         );
       })}
-      {empty > 0 ? (
+      {blank > 0 ? (
+        <p>{blank === 1 ? "One squawk says nothing" : `${blank} squawks say nothing`} yet: write down what was seen, or take it off.</p>
+      ) : null}
+      {empty.length > 0 ? (
         <p>
-          {empty === 1 ? "One reading is empty" : `${empty} readings are empty`}. They can be sent so; each then gets no verdict: no
-          reading.
+          <span className="font-bold">Left empty:</span> {empty.join(", ")}. It can be sent so; a reading that is missing gets no verdict:
+          no reading.
         </p>
       ) : null}
+      <details className="border-rule border-y">
+        <summary className="flex min-h-14 cursor-pointer items-center font-bold">Everything you typed</summary>
+        <div className="pb-4">
+          <RawDebrief debrief={draft.debrief} documents={pack.cards.map(({ document }) => document)} />
+        </div>
+      </details>
       <p className="text-ink-soft">
         The readings lock when they are sent. A correction is made later by the engineer, beside them and with a reason.
       </p>
@@ -161,15 +173,19 @@ export function LookOverScreen({ pack, draft, errors, reports, screens, go, onSe
   );
 }
 
-function emptyReadings({ cards }: ScreenProps["pack"], debrief: ScreenProps["draft"]["debrief"]): number {
-  return cards
-    .flatMap(({ document }) => document.content.points)
-    .flatMap((point) => {
-      const said = debrief.points.find((one) => one.point === point.id);
-      if (said?.outcome === "skipped") return [];
-      return point.readings.filter((reading) => {
-        const entry = said?.readings.find((one) => one.reading === reading.id);
-        return !entry || (entry.value === null && entry.lowest === null && entry.answer === null && entry.rows.length === 0);
-      });
-    }).length;
+/** What was asked and left empty, by name. */
+function leftEmpty(fields: DebriefField[], debrief: Debrief): string[] {
+  const skipped = new Set(debrief.points.filter(({ outcome }) => outcome === "skipped").map(({ point }) => point));
+  const named = fields.flatMap((field) => {
+    if (field.point && skipped.has(field.point)) return [];
+    const asked =
+      field.part === "time" || field.part === "fuel" || field.part === "weather" || (field.reading !== null && ASKED.has(field.part));
+    if (!asked || field.key === "fuel.uplift") return [];
+    const rows = debrief.points.find(({ point }) => point === field.point)?.readings.find(({ reading }) => reading === field.reading)?.rows;
+    const empty = field.kind === "series" ? (rows ?? []).length === 0 : fieldValue(debrief, field) === null;
+    return empty ? [field.label] : [];
+  });
+  return [...new Set(named)];
 }
+
+const ASKED = new Set<DebriefField["part"]>(["value", "lowest", "highest", "rows", "answer"]);

@@ -32,7 +32,9 @@ export function SafetyScreen(props: ScreenProps) {
                     safety: {
                       ...now.safety,
                       [key]: value === "yes",
-                      ...(key === "callMade" && value === "yes" && now.safety.calls.length === 0 ? { calls: [newCall(props)] } : {}),
+                      ...(key === "callMade"
+                        ? { calls: value === "yes" ? (now.safety.calls.length > 0 ? now.safety.calls : [newCall(props)]) : [] }
+                        : {}),
                     },
                   }))
                 }
@@ -57,9 +59,10 @@ export function SafetyScreen(props: ScreenProps) {
 }
 
 function newCall({ pack }: ScreenProps): AbortCall {
+  const points = pack.cards.flatMap(({ document }) => document.content.points);
   return {
-    point: pack.cards[0]?.document.content.points[0]?.id ?? "",
-    word: "abort",
+    point: points.length === 1 ? (points[0]?.id ?? "") : "",
+    word: null,
     trigger: "",
     onGauge: null,
     durationS: null,
@@ -128,6 +131,7 @@ function OneCall({
       <label className="block">
         <span className="mb-1 block">In which point</span>
         <select className={SELECT} value={call.point} onChange={(event) => put({ point: event.target.value })}>
+          <option value="">choose the point</option>
           {cards.flatMap(({ content, identity }) =>
             content.points.map((one, at) => (
               <option key={one.id} value={one.id}>{`Card ${identity.number}, ${at + 1} ${one.title}`}</option>

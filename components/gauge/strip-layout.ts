@@ -21,7 +21,7 @@ export type StripLayout = {
   }[];
 };
 
-const CHARACTER = 8.8; // mean advance of B612 at 16 px, the phone's size
+const CHARACTER = 10; // mean advance of B612 at 16 px, the phone's size
 
 /** Room a label takes on the strip. */
 export const labelWidth = (label: string) => label.length * CHARACTER;

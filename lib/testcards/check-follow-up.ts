@@ -146,9 +146,16 @@ function pointFindings(point: CardPoint, debrief: Debrief, lines: readonly Check
     .map(({ reading }) =>
       at("gauge-changed", `${label(reading)} was read on a changed gauge: calibrate it, then check again.`, reading, "must"),
     );
+  const past = new Set(lines.filter((line) => line.point === point.id && line.verdict === "exceeded").map((line) => line.reading));
   const strange = new Set(
     lines
-      .filter((line) => line.point === point.id && line.comparison !== "abort" && line.notes.some((note) => note.endsWith("normal")))
+      .filter(
+        (line) =>
+          line.point === point.id &&
+          line.comparison !== "abort" &&
+          !past.has(line.reading) &&
+          line.notes.some((note) => note.endsWith("normal")),
+      )
       .map((line) => line.reading),
   );
   const unusual = [...strange].map((reading) =>

@@ -39,7 +39,7 @@ export type ReadingEntry = {
 
 export type AbortCall = {
   point: string;
-  word: CallWord;
+  word: CallWord | null; // null while it is not said yet
   trigger: string; // a parameter code, or words
   onGauge: number | null;
   durationS: number | null;

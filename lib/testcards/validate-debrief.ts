@@ -101,10 +101,23 @@ function weatherErrors({ weather }: Debrief, fields: Map<string, DebriefField>):
   return errors;
 }
 
+const SAFETY_QUESTIONS = {
+  limitExceeded: "was any limit exceeded",
+  callMade: "was abort or knock it off called",
+  rough: "was there any roughness, smell, leak, light or stuck lever",
+} as const;
+
 function safetyErrors({ safety }: Debrief): FieldError[] {
-  return (["limitExceeded", "callMade", "rough"] as const).flatMap((key) =>
-    safety[key] === null ? [{ key: `safety.${key}`, message: "Answer yes or no." }] : [],
+  const open = (["limitExceeded", "callMade", "rough"] as const).flatMap((key) =>
+    safety[key] === null ? [{ key: `safety.${key}`, message: `Answer yes or no: ${SAFETY_QUESTIONS[key]}?` }] : [],
   );
+  const unlike = safety.callMade === false && safety.calls.length > 0;
+  const unsaid = safety.callMade === true && safety.calls.some(({ word, point }) => word === null || point === "");
+  return [
+    ...open,
+    ...(unlike ? [{ key: "safety.callMade", message: "No call was made, but one is written down: answer yes, or take it off." }] : []),
+    ...(unsaid ? [{ key: "safety.callMade", message: "Say of each call in which point it came and which word was used." }] : []),
+  ];
 }
 
 function pointErrors(point: string, said: PointDebrief | undefined, fields: Map<string, DebriefField>, complete: boolean): FieldError[] {

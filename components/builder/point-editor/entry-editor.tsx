@@ -110,7 +110,7 @@ export function EntryEditor({ card, point, change, newId }: PointPartProps) {
         value={point.entryText}
         maxLength={200}
         focusKey="entry"
-        onChange={(entryText) => change({ entryText }, "entry text")}
+        onChange={(entryText) => change({ entryText: entryText.replace(/\s*\n\s*/g, " ") }, "entry text")}
       />
     </div>
   );

@@ -137,7 +137,7 @@ export function PointEditor(props: EditorProps) {
             rows={3}
             maxLength={300}
             focusKey="recovery"
-            onChange={(recovery) => change({ recovery }, "recovery")}
+            onChange={(recovery) => change({ recovery: recovery.replace(/\s*\n\s*/g, " ") }, "recovery")}
           />,
         )}
         {section("rules", "Completion, height and objectives", ["completion", "heightFloor", "objectives"], <RuleFields {...part} />)}

@@ -42,7 +42,7 @@ const pointDebrief: z.ZodType<PointDebrief> = z.strictObject({
 
 const call: z.ZodType<AbortCall> = z.strictObject({
   point: id,
-  word: z.enum(CALL_WORDS, "Choose the word that was called."),
+  word: z.enum(CALL_WORDS, "Choose the word that was called.").nullable(),
   trigger: said,
   onGauge: figure.nullable(),
   durationS: seconds,

@@ -1,11 +1,13 @@
 import Link from "next/link";
 import { cache } from "react";
 import { CardBuilder } from "@/components/builder/card-builder";
+import { differencesFromShelf } from "@/components/builder/shelf-difference";
 import { CardRecord, type CardRecordView } from "@/components/card/card-record";
 import { CardState } from "@/components/card/card-state";
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { env } from "@/lib/env";
 import { codeMatrix, sheetCodeUrl } from "@/lib/pdf/kneeboard/sheet-code";
+import type { CardPoint } from "@/lib/testcards/card";
 import { type CardView, getCardRevision } from "@/lib/workflow/card/queries";
 import { listTestPoints } from "@/lib/workflow/programme/queries";
 import { orNotFound } from "../../../../or-not-found";
@@ -24,15 +26,24 @@ const viewOf = cache(async (card: string, rev: string | undefined) => {
 });
 
 /** Only what the record shows goes to the browser. */
-function toRecord({ card, revision, document, digest, findings, comments, stamp, may }: CardView): CardRecordView {
-  const { id, letter, state, version, answers, endedWhy, endedAt } = revision;
+function toRecord(shelf: CardPoint[], { card, revision, document, digest, findings, comments, stamp, may }: CardView): CardRecordView {
+  const { id, letter, state, version, answers, submittedAt, endedWhy, endedAt } = revision;
+  const authorName = document.identity.author.name;
+  const differences = document.content.points.flatMap((point) => {
+    const parts = differencesFromShelf(
+      point,
+      shelf.find(({ template }) => template?.code === point.template?.code),
+    ).map(({ label }) => label);
+    return parts.length > 0 ? [{ point: point.id, parts }] : [];
+  });
   return {
     card: { id: card.id, number: card.number },
-    revision: { id, letter, state, version, answers, endedWhy, endedAt },
+    revision: { id, letter, state, version, answers, authorName, submittedAt, endedWhy, endedAt },
     document,
     digest,
     findings,
     comments,
+    differences,
     stamp,
     code: stamp ? codeMatrix(sheetCodeUrl(env().NEXTAUTH_URL ?? "", stamp.code)) : null,
     may,
@@ -45,6 +56,7 @@ export default async function CardPage({ params, searchParams }: Props) {
   const { db, actor } = await requestCtx();
   const view = await viewOf((await params).card, (await searchParams).rev);
   const { document, revision } = view;
+  const shelf = listTestPoints(db, actor, programme).map(({ content }) => content);
   const { widths: _widths, ...context } = view.context;
   return (
     <main className="grow bg-paper">
@@ -56,7 +68,7 @@ export default async function CardPage({ params, searchParams }: Props) {
           content={document.content}
           programme={view.programme}
           context={context}
-          shelf={listTestPoints(db, actor, programme).map(({ content }) => content)}
+          shelf={shelf}
           answers={revision.answers}
           comments={view.comments}
           beside={<Standing view={view} />}
@@ -69,7 +81,7 @@ export default async function CardPage({ params, searchParams }: Props) {
             </h1>
             <Standing view={view} />
           </header>
-          <CardRecord key={revision.id} view={toRecord(view)} />
+          <CardRecord key={revision.id} view={toRecord(shelf, view)} />
         </>
       )}
     </main>

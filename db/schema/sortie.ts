@@ -44,6 +44,8 @@ export const sorties = sqliteTable(
     goNoGo: text("go_no_go", { mode: "json" }).$type<{ line: string; go: boolean }[] | null>(), // as ticked at the brief
     answers: text("answers", { mode: "json" }).$type<Record<string, string>>().notNull().default({}), // to "should" findings, by finding key
     closedWhy: text("closed_why"),
+    closedAt: instant("closed_at"),
+    closedBy: text("closed_by").references(() => users.id),
   },
   (t) => [
     uniqueIndex("sorties_number").on(t.programmeId, t.number),
@@ -180,6 +182,18 @@ export const squawks = sqliteTable(
     raisedBy: text("raised_by").references(() => users.id),
     raisedAt: instant("raised_at").notNull(),
     closedAt: instant("closed_at"),
+    assessedBy: text("assessed_by").references(() => users.id),
+    assessedAt: instant("assessed_at"),
+    assessedWhy: text("assessed_why"),
+    dispositionWhy: text("disposition_why"),
+    dispositionLimit: text("disposition_limit"), // of "deferred with limit"
+    entryReference: text("entry_reference"), // where the work is written up
+    dispositionedBy: text("dispositioned_by").references(() => users.id),
+    dispositionedAt: instant("dispositioned_at"),
+    verifiedReference: text("verified_reference"), // on a grounding one the licensed person's entry
+    verifiedBy: text("verified_by").references(() => users.id),
+    verifiedAt: instant("verified_at"),
+    closedBy: text("closed_by").references(() => users.id),
   },
   (t) => [
     uniqueIndex("squawks_number").on(t.programmeId, t.number),

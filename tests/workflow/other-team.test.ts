@@ -16,14 +16,22 @@ import * as programme from "@/lib/workflow/programme/queries";
 import { getProgrammeSnapshot } from "@/lib/workflow/programme/snapshot";
 import { answerCard } from "@/lib/workflow/sortie/answer-card";
 import { briefSortie } from "@/lib/workflow/sortie/brief-sortie";
+import { cancelSortie } from "@/lib/workflow/sortie/cancel-sortie";
 import { changeSortie } from "@/lib/workflow/sortie/change-sortie";
+import { closeSortie } from "@/lib/workflow/sortie/close-sortie";
 import { disposePoint } from "@/lib/workflow/sortie/dispose-point";
 import { enterLoading } from "@/lib/workflow/sortie/enter-loading";
 import { listWaiting } from "@/lib/workflow/sortie/flight-line";
 import { planSortie } from "@/lib/workflow/sortie/plan-sortie";
 import { getSortie, getSortieResults, listSorties } from "@/lib/workflow/sortie/queries";
+import { acceptSquawk } from "@/lib/workflow/squawk/accept-squawk";
+import { assessSquawk } from "@/lib/workflow/squawk/assess-squawk";
+import { closeSquawk } from "@/lib/workflow/squawk/close-squawk";
+import { listSquawkHistory } from "@/lib/workflow/squawk/history";
 import { getSquawk, listSquawks } from "@/lib/workflow/squawk/queries";
 import { raiseSquawk } from "@/lib/workflow/squawk/raise-squawk";
+import { rectifySquawk } from "@/lib/workflow/squawk/rectify-squawk";
+import { verifySquawk } from "@/lib/workflow/squawk/verify-squawk";
 import { countersignStep } from "@/lib/workflow/step/countersign-step";
 import { proposeStep } from "@/lib/workflow/step/propose-step";
 import { sayHold } from "@/lib/workflow/step/say-hold";
@@ -66,12 +74,19 @@ const acts: [string, (ctx: Ctx, input: unknown) => unknown, Record<string, unkno
   ["sortie.enter-loading", enterLoading, { sortieId, version: 1, settings }],
   ["sortie.answer-card", answerCard, { sortieId, revisionId, digest, answer: "accepted" }],
   ["sortie.brief", briefSortie, { sortieId, goNoGo: [] }],
+  ["sortie.close", closeSortie, { sortieId }],
+  ["sortie.cancel", cancelSortie, { sortieId, version: 1, why: "no" }],
   ["debrief.submit", submitDebrief, { id: desk.newId(), sortieId, content }],
   ["point.dispose", disposePoint, { ...point, disposition: "accept" }],
   ["step.propose", proposeStep, { ...point, decision: "hold", why: "no" }],
   ["step.hold", sayHold, { ...point, why: "no" }],
   ["step.countersign", countersignStep, { stepId: step.id }],
   ["squawk.raise", raiseSquawk, { programmeId: desk.programmeId, system: "Fuel", text: "no", severity: "monitor" }],
+  ["squawk.assess", assessSquawk, { squawkId: squawk.id, severity: "monitor" }],
+  ["squawk.rectify", rectifySquawk, { squawkId: squawk.id, disposition: "rectified", why: "no", entryReference: "no" }],
+  ["squawk.accept", acceptSquawk, { squawkId: squawk.id, disposition: "accepted as is", why: "no" }],
+  ["squawk.verify", verifySquawk, { squawkId: squawk.id, entryReference: "no" }],
+  ["squawk.close", closeSquawk, { squawkId: squawk.id }],
   ["session.end", endSession, { sessionId: desk.people.pilot.sessionId }],
 ];
 
@@ -106,6 +121,7 @@ describe("what belongs to another team does not exist", () => {
     ["getSortie", () => getSortie(db, actor, sortieId, { today: TODAY })],
     ["getSortieResults", () => getSortieResults(db, actor, sortieId)],
     ["listSquawks", () => listSquawks(db, actor, desk.programmeId)],
+    ["listSquawkHistory", () => listSquawkHistory(db, actor, squawk.id)],
     ["getSquawk", () => getSquawk(db, actor, squawk.id)],
   ];
   test.each(reads)("for %s", (_, read) => {

@@ -3,6 +3,7 @@ import { debriefs, pointDispositions } from "@/db/schema";
 import { runCheck } from "../debrief/run-check";
 import { Refusal } from "../errors";
 import { defineUseCase } from "../use-case";
+import { requireNotClosed } from "./internal";
 import { getSortieRow, listSortieCards } from "./rows";
 import { DisposePointInput } from "./schema";
 
@@ -14,6 +15,7 @@ export const disposePoint = defineUseCase({
   run(tx, ctx, { sortieId, revisionId, pointId, disposition, why }) {
     const { actor, now, newId } = ctx;
     const sortie = getSortieRow(tx, actor, sortieId);
+    requireNotClosed(sortie, "what its points are worth");
     const debrief = tx.select({ content: debriefs.content }).from(debriefs).where(eq(debriefs.sortieId, sortieId)).get();
     if (!debrief) throw new Refusal("conflict", "This sortie has no debrief yet, so there is nothing to dispose of. The pilot submits it.");
     const flown = listSortieCards(tx, actor, sortie);

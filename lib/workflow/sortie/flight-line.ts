@@ -1,10 +1,13 @@
-import { and, asc, eq, inArray, isNull, or, sql } from "drizzle-orm";
+import { and, asc, eq, inArray, isNull, ne, sql } from "drizzle-orm";
 import type { Db, Tx } from "@/db/open";
 import { cardRevisions, cards, configurations, programmes, reviewComments, sortieCards, sorties, squawks } from "@/db/schema";
 import type { Actor } from "@/lib/auth/roles";
 import { hasRole } from "@/lib/auth/roles";
 import type { SortieKind, SquawkSeverity } from "@/lib/testcards/words";
 import { wroteIt } from "../card/policy";
+import { may } from "../permissions";
+import { NEXT, type SquawkAct } from "../squawk/policy";
+import { openForClosing } from "./closing";
 
 type Reader = Db | Tx;
 
@@ -21,8 +24,17 @@ export type WaitingItem =
   | ({ what: "brief sortie" } & SortieWaiting)
   | ({ what: "debrief sortie" } & SortieWaiting)
   | ({ what: "review results" } & SortieWaiting)
+  | ({ what: "close sortie" } & SortieWaiting)
   | ({ what: "sign configuration" } & InProgramme & { configurationId: string; number: string })
-  | ({ what: "open squawk" } & InProgramme & { squawkId: string; number: number; text: string; severity: SquawkSeverity });
+  | ({ what: "open squawk" } & InProgramme & {
+        squawkId: string;
+        number: number;
+        text: string;
+        severity: SquawkSeverity;
+        /** What this person does next; null on a grounding one that waits for somebody else. */
+        act: SquawkAct | null;
+        by: string;
+      });
 
 /** What waits for me, by the roles I hold; the whole of my team's programmes. */
 export function listWaiting(db: Reader, actor: Actor): WaitingItem[] {
@@ -83,7 +95,11 @@ function waitingSorties(db: Reader, actor: Actor): WaitingItem[] {
   const pilot = hasRole(actor, ["pilot"]);
   const engineer = hasRole(actor, ["engineer"]);
   return rows.flatMap(({ state, unanswered, ...sortie }): WaitingItem[] => {
-    if (state === "debriefed") return engineer ? [{ what: "review results", ...sortie }] : [];
+    if (state === "debriefed") {
+      if (!engineer) return [];
+      const decided = openForClosing(db, actor, { id: sortie.sortieId, programmeId: sortie.programmeId }).length === 0;
+      return [{ what: decided ? "close sortie" : "review results", ...sortie }];
+    }
     if (!pilot) return [];
     if (state !== "planned") return [{ what: "debrief sortie", ...sortie }];
     return unanswered > 0 ? [{ what: "answer cards", unanswered, ...sortie }] : [{ what: "brief sortie", ...sortie }];
@@ -106,8 +122,8 @@ function unsignedConfigurations(db: Reader, actor: Actor): WaitingItem[] {
     .map((row) => ({ what: "sign configuration", ...row }));
 }
 
+/** What this person does next on each squawk; a grounding one is shown until it is verified, whoever is next. */
 function openSquawks(db: Reader, actor: Actor): WaitingItem[] {
-  const engineer = hasRole(actor, ["engineer"]);
   return db
     .select({
       programmeId: programmes.id,
@@ -116,17 +132,17 @@ function openSquawks(db: Reader, actor: Actor): WaitingItem[] {
       number: squawks.number,
       text: squawks.text,
       severity: squawks.severity,
+      state: squawks.state,
     })
     .from(squawks)
     .innerJoin(programmes, eq(programmes.id, squawks.programmeId))
-    .where(
-      and(
-        eq(programmes.teamId, actor.teamId),
-        or(eq(squawks.state, engineer ? "open" : "assessed"), eq(squawks.severity, "grounding")),
-        inArray(squawks.state, ["open", "assessed", "dispositioned"]),
-      ),
-    )
+    .where(and(eq(programmes.teamId, actor.teamId), ne(squawks.state, "closed")))
     .orderBy(asc(squawks.number))
     .all()
-    .map((row) => ({ what: "open squawk", ...row }));
+    .flatMap(({ state, ...squawk }): WaitingItem[] => {
+      const next = NEXT[state];
+      const mine = next !== null && may(actor, next.permission);
+      if (!next || (!mine && (squawk.severity !== "grounding" || state === "verified"))) return [];
+      return [{ what: "open squawk", ...squawk, act: mine ? next.act : null, by: next.by }];
+    });
 }

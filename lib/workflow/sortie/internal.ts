@@ -23,6 +23,12 @@ export function requireOpen(sortie: Pick<SortieRow, "state" | "number">, act: st
     });
 }
 
+/** What was decided on a closed sortie stands. */
+export function requireNotClosed({ state, number }: Pick<SortieRow, "state" | "number">, act: string): void {
+  if (state === "closed")
+    throw new Refusal("conflict", `Sortie ${number} is closed: ${act} can no longer be changed.`, undefined, { state });
+}
+
 export function requireSortieVersion(sortie: Pick<SortieRow, "version">, seen: number): void {
   if (sortie.version !== seen)
     throw new Refusal(

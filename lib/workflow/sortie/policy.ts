@@ -16,3 +16,5 @@ export const maySubmitDebrief = (actor: Person, { state }: SortieFacts) =>
   may(actor, "brief and debrief") && state !== "debriefed" && state !== "closed";
 export const mayDisposePoint = (actor: Person, { state }: SortieFacts) => may(actor, "amend readings") && state === "debriefed";
 export const mayProposeStep = (actor: Person, { state }: SortieFacts) => may(actor, "propose a step") && state === "debriefed";
+export const mayCloseSortie = (actor: Person, { state }: SortieFacts) => may(actor, "plan sorties") && state === "debriefed";
+export const mayCancelSortie = mayChangeSortie;

@@ -8,6 +8,7 @@ import { getReadinessFacts } from "../card/context";
 import { Refusal } from "../errors";
 import { getProgramme } from "../programme/queries";
 import { listSortieSquawks } from "../squawk/queries";
+import { openForClosing } from "./closing";
 import { listDispositions } from "./dispositions";
 import * as policy from "./policy";
 import { getSortieRow, listCrew, listSortieCards, type SortieCard, type SortieRow, toSortiePlan } from "./rows";
@@ -49,7 +50,7 @@ export type SortieView = {
   context: SortieContext;
   findings: Finding[];
   debrief: DebriefRow | null;
-  may: Record<"change" | "answer" | "brief" | "debrief", boolean>;
+  may: Record<"change" | "answer" | "brief" | "debrief" | "cancel", boolean>;
 };
 
 export function getSortie(db: Reader, actor: Actor, sortieId: string, { today }: { today: string }): SortieView {
@@ -71,6 +72,7 @@ export function getSortie(db: Reader, actor: Actor, sortieId: string, { today }:
       answer: policy.mayAnswerCard(actor, sortie),
       brief: policy.mayBriefSortie(actor, sortie),
       debrief: policy.maySubmitDebrief(actor, sortie),
+      cancel: policy.mayCancelSortie(actor, sortie),
     },
   };
 }
@@ -118,7 +120,13 @@ export function getSortieResults(db: Reader, actor: Actor, sortieId: string, { v
     decisions: listSortieDecisions(db, sortieId),
     /** What happened may always be entered; that it was flown without a brief stays visible. */
     flownUnbriefed: sortie.briefedAt === null,
-    may: { dispose: policy.mayDisposePoint(actor, sortie), proposeStep: policy.mayProposeStep(actor, sortie) },
+    /** What keeps it from being closed, while it is debriefed. */
+    open: sortie.state === "debriefed" ? openForClosing(db, actor, sortie) : [],
+    may: {
+      dispose: policy.mayDisposePoint(actor, sortie),
+      proposeStep: policy.mayProposeStep(actor, sortie),
+      close: policy.mayCloseSortie(actor, sortie),
+    },
   };
 }
 export type SortieResults = ReturnType<typeof getSortieResults>;

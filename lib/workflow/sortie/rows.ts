@@ -15,6 +15,7 @@ const author = alias(users, "author");
 const answerer = alias(users, "answerer");
 const briefer = alias(users, "briefer");
 const planner = alias(users, "planner");
+const closer = alias(users, "closer");
 
 export function getSortieRow(db: Reader, actor: Actor, sortieId: string) {
   const row = db
@@ -23,11 +24,13 @@ export function getSortieRow(db: Reader, actor: Actor, sortieId: string) {
       configurationNumber: configurations.number,
       plannedByName: planner.name,
       briefedByName: briefer.name,
+      closedByName: closer.name,
     })
     .from(sorties)
     .innerJoin(programmes, eq(programmes.id, sorties.programmeId))
     .innerJoin(planner, eq(planner.id, sorties.plannedBy))
     .leftJoin(briefer, eq(briefer.id, sorties.briefedBy))
+    .leftJoin(closer, eq(closer.id, sorties.closedBy))
     .leftJoin(configurations, eq(configurations.id, sorties.configurationId))
     .where(and(eq(sorties.id, sortieId), eq(programmes.teamId, actor.teamId)))
     .get();

@@ -84,3 +84,9 @@ export const DisposePointInput = z
     path: ["why"],
     message: "Say why: the data stays, with this line beside it.",
   });
+export const CloseSortieInput = z.strictObject({ sortieId: uuid, why: line(300).default("") });
+export const CancelSortieInput = z.strictObject({
+  sortieId: uuid,
+  version,
+  why: lineRequired(300, "Say in one line why it is cancelled."),
+});

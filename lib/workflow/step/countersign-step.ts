@@ -2,6 +2,8 @@ import { and, eq, getTableColumns } from "drizzle-orm";
 import { programmes, signatures, stepDecisions } from "@/db/schema";
 import { digestOf } from "../digest";
 import { Refusal } from "../errors";
+import { requireNotClosed } from "../sortie/internal";
+import { getSortieRow } from "../sortie/rows";
 import { defineUseCase } from "../use-case";
 import { CountersignStepInput } from "./schema";
 
@@ -21,6 +23,7 @@ export const countersignStep = defineUseCase({
     if (step.origin === "paper records") throw new Refusal("conflict", "This step was entered from paper records; it was signed there.");
     if (step.countersignedAt !== null)
       return { out: { id: stepId, decision: step.decision, countersignedAt: step.countersignedAt }, audit: "unchanged" };
+    if (step.sortieId !== null) requireNotClosed(getSortieRow(tx, actor, step.sortieId), "its step decisions");
     if (step.proposedBy === actor.id) throw new Refusal("forbidden", "You proposed this step, so another reviewer countersigns it.");
     const countersignedAt = now.toISOString();
     const digest = digestOf(step);

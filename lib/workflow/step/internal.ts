@@ -37,6 +37,10 @@ export function getFlownPoint(
   return { sortie, point, code: point.template.code, computed, report: newest.report };
 }
 
+/** The step of the build-up that a point flies: its level in the series, or its positions. */
+export const stepName = ({ series, positions }: Pick<CardPoint, "series" | "positions">, code: string): string =>
+  series ? `${code} at ${series.level.value} ${series.level.unit}` : [code, ...positions.map(({ position }) => position)].join(" ");
+
 type Decided = { decision: StepDecision; because: string[]; reading: string | null };
 
 /** One more row: earlier decisions on the same step stay, the newest counts. */
@@ -64,9 +68,7 @@ export function insertDecision(
     id: newId(),
     programmeId: sortie.programmeId,
     testPointCode: code,
-    step: point.series
-      ? `${code} at ${point.series.level.value} ${point.series.level.unit}`
-      : [code, ...point.positions.map(({ position }) => position)].join(" "),
+    step: stepName(point, code),
     series: point.series?.name ?? null,
     level: point.series?.level.value ?? null,
     measured: line?.asTrue?.value ?? null,

@@ -1,4 +1,5 @@
 import { Refusal } from "../errors";
+import { requireNotClosed } from "../sortie/internal";
 import { defineUseCase } from "../use-case";
 import { getFlownPoint, insertDecision, isLooser } from "./internal";
 import { ProposeStepInput } from "./schema";
@@ -10,6 +11,7 @@ export const proposeStep = defineUseCase({
   input: ProposeStepInput,
   run(tx, ctx, { decision, reading, why, ...where }) {
     const flown = getFlownPoint(tx, ctx, where);
+    requireNotClosed(flown.sortie, "its step decisions");
     const { computed } = flown;
     if (isLooser(decision, computed.decision))
       throw new Refusal(

@@ -2,7 +2,7 @@ import { defineUseCase } from "../use-case";
 import { getFlownPoint, insertDecision } from "./internal";
 import { SayHoldInput } from "./schema";
 
-/** Anybody who works on the aircraft may hold the build-up; it needs nobody's countersignature. */
+/** Anybody who works on the aircraft may hold the build-up, also after the sortie was closed; it needs nobody's countersignature. */
 export const sayHold = defineUseCase({
   name: "step.hold",
   permission: "say hold",

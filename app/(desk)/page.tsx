@@ -5,7 +5,7 @@ import { PageHeader, Section } from "@/components/ui/page-header";
 import { Cell, HeadCell, Row, RowHead, Table, TableHead } from "@/components/ui/table";
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatDay } from "@/lib/format/time";
-import { countOf, sentenceCase } from "@/lib/format/words";
+import { countOf } from "@/lib/format/words";
 import { listProgrammes, type ProgrammeListItem } from "@/lib/workflow/programme/queries";
 import { listWaiting } from "@/lib/workflow/sortie/flight-line";
 import { listSorties, type SortieListItem } from "@/lib/workflow/sortie/queries";
@@ -21,7 +21,11 @@ export default async function FlightLinePage() {
     <main className="mx-auto w-full max-w-6xl grow px-4 py-8 desk:px-6">
       <PageHeader
         title="Flight line"
-        lead={`${formatDay(today)}. ${sentenceCase(countOf(waiting.length, "thing"))} ${waiting.length === 1 ? "waits" : "wait"} for you.`}
+        lead={
+          waiting.length === 0
+            ? `${formatDay(today)}.`
+            : `${formatDay(today)}. ${countOf(waiting.length, "thing")} ${waiting.length === 1 ? "waits" : "wait"} for you.`
+        }
       />
       <Section id="waiting" title="Waits for you">
         {waiting.length === 0 ? (

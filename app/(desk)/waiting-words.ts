@@ -1,5 +1,5 @@
 import { formatDay } from "@/lib/format/time";
-import { countOf } from "@/lib/format/words";
+import { countOf, sentenceCase } from "@/lib/format/words";
 import type { WaitingItem } from "@/lib/workflow/sortie/flight-line";
 
 export type WaitingLine = { key: string; head: string; text: string; address: string };
@@ -21,16 +21,20 @@ export function waitingLine(item: WaitingItem): WaitingLine {
     }
     case "answer cards":
     case "brief sortie":
-    case "review results": {
-      const head = { "answer cards": "Accept or decline the cards of", "brief sortie": "Brief", "review results": "Review the results of" }[
-        item.what
-      ];
+    case "review results":
+    case "close sortie": {
+      const head = {
+        "answer cards": "Accept or decline the cards of",
+        "brief sortie": "Brief",
+        "review results": "Review the results of",
+        "close sortie": "Close",
+      }[item.what];
       const cards = item.what === "answer cards" ? `, ${countOf(item.unanswered, "card")} unanswered` : "";
       return {
         key: `${item.what}${item.sortieId}`,
         head: `${head} sortie ${item.number}`,
         text: `${item.kind}, ${formatDay(item.plannedOn)}${cards}`,
-        address: `${base}/sorties/${item.sortieId}`,
+        address: `${base}/sorties/${item.sortieId}${item.what === "close sortie" ? "/results" : ""}`,
       };
     }
     case "debrief sortie":
@@ -50,9 +54,9 @@ export function waitingLine(item: WaitingItem): WaitingLine {
     case "open squawk":
       return {
         key: item.squawkId,
-        head: `Squawk ${item.number}, ${item.severity}`,
-        text: item.text,
-        address: `${base}/squawks#squawk-${item.number}`,
+        head: `${item.act ? `${sentenceCase(item.act)} squawk` : "Squawk"} ${item.number}, ${item.severity}`,
+        text: item.act ? item.text : `${item.text.replace(/\.$/, "")}. ${item.by}`,
+        address: `${base}/squawks/${item.squawkId}`,
       };
   }
 }

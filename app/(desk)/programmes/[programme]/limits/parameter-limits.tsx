@@ -40,9 +40,12 @@ export function ParameterLimits({
       <Table label={`Limits of ${parameter.name}`}>
         <TableHead>
           <HeadCell>Layer</HeadCell>
-          <HeadCell figures>True</HeadCell>
+          <HeadCell className="hand:hidden">True, on the gauge</HeadCell>
+          <HeadCell figures className="max-hand:hidden">
+            True
+          </HeadCell>
           {instruments.map((instrument) => (
-            <HeadCell key={instrument.id} figures className="min-w-56">
+            <HeadCell key={instrument.id} figures className="min-w-56 max-hand:hidden">
               On the gauge
               <span className="block font-normal">
                 {instrument.name}
@@ -52,11 +55,11 @@ export function ParameterLimits({
               </span>
             </HeadCell>
           ))}
-          <HeadCell>Source</HeadCell>
+          <HeadCell className="max-hand:hidden">Source</HeadCell>
         </TableHead>
         <tbody>
           {rows.map((row) => (
-            <LimitLine key={row.key} row={row} />
+            <LimitLine key={row.key} row={row} gauges={instruments} />
           ))}
         </tbody>
       </Table>
@@ -64,23 +67,41 @@ export function ParameterLimits({
   );
 }
 
-function LimitLine({ row: { layer, words, trueText, onGauges, source } }: { row: LimitRow }) {
+/** On a phone the true value and what each gauge shows stand under one another in one cell, the source under the words. */
+function LimitLine({ row: { layer, words, trueText, onGauges, source }, gauges }: { row: LimitRow; gauges: Instrument[] }) {
   const [head = "", ...rest] = words.split(", ");
   return (
     <Row>
-      <RowHead className="min-w-56">
+      <RowHead className="hand:min-w-56">
         <span className={layer === "normal" ? "" : "font-bold"}>{sentenceCase(head)}</span>
         {rest.length > 0 ? <span className="text-ink-soft">, {rest.join(", ")}</span> : null}
+        {source ? <span className="block text-ink-soft text-sm hand:hidden">{source}</span> : null}
       </RowHead>
-      <Cell figures>{trueText}</Cell>
-      {onGauges.map((text, i) => (
-        // biome-ignore lint/suspicious/noArrayIndexKey: one cell an instrument, in the head's order.
-        <Cell key={i} figures className={layer === "abort" ? "font-bold" : ""}>
-          {text}
+      <Cell className="hand:hidden">
+        <StackedFigure label="true" text={trueText} />
+        {gauges.map(({ id, name }, i) => (
+          <StackedFigure key={id} label={`on the gauge, ${name}`} text={onGauges[i] ?? "—"} bold={layer === "abort"} />
+        ))}
+      </Cell>
+      <Cell figures className="max-hand:hidden">
+        {trueText}
+      </Cell>
+      {gauges.map(({ id }, i) => (
+        <Cell key={id} figures className={layer === "abort" ? "font-bold max-hand:hidden" : "max-hand:hidden"}>
+          {onGauges[i] ?? "—"}
         </Cell>
       ))}
-      <Cell className="min-w-40 text-ink-soft">{source}</Cell>
+      <Cell className="min-w-40 text-ink-soft max-hand:hidden">{source}</Cell>
     </Row>
+  );
+}
+
+function StackedFigure({ label, text, bold = false }: { label: string; text: string; bold?: boolean }) {
+  return (
+    <span className="block pb-1">
+      <span className="block text-ink-soft text-sm">{label}</span>
+      <span className={bold ? "font-bold" : ""}>{text}</span>
+    </span>
   );
 }
 

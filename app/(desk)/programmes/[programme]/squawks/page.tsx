@@ -65,44 +65,53 @@ function SquawkTable({ squawks, programmeId }: { squawks: SquawkListItem[]; prog
     <Table label="Squawks">
       <TableHead>
         <HeadCell figures>No.</HeadCell>
-        <HeadCell>Severity</HeadCell>
+        <HeadCell className="max-hand:hidden">Severity</HeadCell>
         <HeadCell>What was seen</HeadCell>
         <HeadCell>State</HeadCell>
-        <HeadCell>From</HeadCell>
-        <HeadCell>Raised</HeadCell>
+        <HeadCell className="max-hand:hidden">From</HeadCell>
+        <HeadCell className="max-hand:hidden">Raised</HeadCell>
       </TableHead>
       <tbody>
         {squawks.map((squawk) => (
-          <Row key={squawk.id} id={`squawk-${squawk.number}`}>
-            <Cell figures>{squawk.number}</Cell>
-            <Cell>
-              <SeverityMark severity={squawk.severity} ended={ENDED.includes(squawk.state)} />
-            </Cell>
-            <RowHead className="min-w-64">
-              <span className="font-bold">{squawk.system}</span> <span className="[overflow-wrap:anywhere]">{squawk.text}</span>
-            </RowHead>
-            <Cell className="whitespace-nowrap">
-              {squawk.state}
-              {squawk.disposition ? <span className="block text-ink-soft text-sm">{squawk.disposition}</span> : null}
-            </Cell>
-            <Cell className="whitespace-nowrap">
-              {squawk.sortieId ? (
-                <Link href={`/programmes/${programmeId}/sorties/${squawk.sortieId}`} className="link py-1">
-                  Sortie {squawk.sortieNumber}
-                </Link>
-              ) : (
-                "a person"
-              )}
-            </Cell>
-            <Cell className="min-w-40">
-              {formatInstant(squawk.raisedAt)}
-              <span className="block text-ink-soft text-sm">
-                {squawk.raisedFrom === "exceedance" ? "by the check of readings" : squawk.raisedByName}
-              </span>
-            </Cell>
-          </Row>
+          <SquawkLine key={squawk.id} squawk={squawk} programmeId={programmeId} />
         ))}
       </tbody>
     </Table>
+  );
+}
+
+/** On a phone the severity stands under what was seen; where it came from stands on the squawk's own page. */
+function SquawkLine({ squawk, programmeId }: { squawk: SquawkListItem; programmeId: string }) {
+  const severity = <SeverityMark severity={squawk.severity} ended={ENDED.includes(squawk.state)} />;
+  return (
+    <Row id={`squawk-${squawk.number}`}>
+      <Cell figures>{squawk.number}</Cell>
+      <Cell className="max-hand:hidden">{severity}</Cell>
+      <RowHead className="hand:min-w-64">
+        <Link href={`/programmes/${programmeId}/squawks/${squawk.id}`} className="link inline-block py-1 [overflow-wrap:anywhere]">
+          <span className="font-bold">{squawk.system}</span> {squawk.text}
+        </Link>
+        <span className="block pt-1 hand:hidden">{severity}</span>
+      </RowHead>
+      <Cell>
+        {squawk.state}
+        {squawk.disposition ? <span className="block text-ink-soft text-sm">{squawk.disposition}</span> : null}
+      </Cell>
+      <Cell className="whitespace-nowrap max-hand:hidden">
+        {squawk.sortieId ? (
+          <Link href={`/programmes/${programmeId}/sorties/${squawk.sortieId}`} className="link py-1">
+            Sortie {squawk.sortieNumber}
+          </Link>
+        ) : (
+          "a person"
+        )}
+      </Cell>
+      <Cell className="min-w-40 max-hand:hidden">
+        {formatInstant(squawk.raisedAt)}
+        <span className="block text-ink-soft text-sm">
+          {squawk.raisedFrom === "exceedance" ? "by the check of readings" : squawk.raisedByName}
+        </span>
+      </Cell>
+    </Row>
   );
 }

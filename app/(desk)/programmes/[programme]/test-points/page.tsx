@@ -49,39 +49,65 @@ function Shelf({
       <Table label={`Test points, ${title.toLowerCase()}`}>
         <TableHead>
           <HeadCell>Test point</HeadCell>
-          <HeadCell>Order</HeadCell>
-          <HeadCell>Positions</HeadCell>
-          <HeadCell>After</HeadCell>
-          <HeadCell>Complete when</HeadCell>
-          <HeadCell figures>Takes</HeadCell>
-          <HeadCell figures>Readings</HeadCell>
-          <HeadCell>Risk</HeadCell>
+          <HeadCell className="max-hand:hidden">Order</HeadCell>
+          <HeadCell className="max-hand:hidden">Positions</HeadCell>
+          <HeadCell className="max-hand:hidden">After</HeadCell>
+          <HeadCell className="max-hand:hidden">Complete when</HeadCell>
+          <HeadCell figures className="max-hand:hidden">
+            Takes
+          </HeadCell>
+          <HeadCell figures className="max-hand:hidden">
+            Readings
+          </HeadCell>
+          <HeadCell className="max-hand:hidden">Risk</HeadCell>
         </TableHead>
         <tbody>
-          {points.map(({ code, title: name, content }) => {
-            const risk = highestRisk(content, hazards);
-            return (
-              <Row key={code}>
-                <RowHead className="min-w-64">
-                  <Link href={`/programmes/${programmeId}/test-points/${code}`} className="link py-1 font-bold">
-                    {code} {name}
-                  </Link>
-                  <span className="block text-ink-soft text-sm">{content.purpose}</span>
-                </RowHead>
-                <Cell>{content.order}</Cell>
-                <Cell className="whitespace-nowrap">
-                  {content.positions.map(({ control, position }) => `${control} ${position}`).join(", ") || "—"}
-                </Cell>
-                <Cell>{content.parents.join(", ") || "—"}</Cell>
-                <Cell className="whitespace-nowrap">{content.completion.rule}</Cell>
-                <Cell figures>{formatMinutes(content.durationMin)}</Cell>
-                <Cell figures>{content.readings.length}</Cell>
-                <Cell>{risk ? <Badge tone={RISK_TONE[risk]}>{risk}</Badge> : "—"}</Cell>
-              </Row>
-            );
-          })}
+          {points.map((point) => (
+            <ShelfRow key={point.code} point={point} hazards={hazards} programmeId={programmeId} />
+          ))}
         </tbody>
       </Table>
     </Section>
+  );
+}
+
+/** On a phone the columns stand as one line of words under the purpose. */
+function ShelfRow({ point: { code, title, content }, hazards, programmeId }: { point: TestPoint; hazards: Hazard[]; programmeId: string }) {
+  const risk = highestRisk(content, hazards);
+  const positions = content.positions.map(({ control, position }) => `${control} ${position}`).join(", ");
+  const riskMark = risk ? <Badge tone={RISK_TONE[risk]}>{risk}</Badge> : "—";
+  return (
+    <Row>
+      <RowHead className="hand:min-w-64">
+        <Link href={`/programmes/${programmeId}/test-points/${code}`} className="link py-1 font-bold">
+          {code} {title}
+        </Link>
+        <span className="block text-ink-soft text-sm">{content.purpose}</span>
+        <span className="block pt-1 hand:hidden">
+          {[
+            content.order,
+            positions,
+            content.parents.length > 0 ? `after ${content.parents.join(", ")}` : "",
+            content.completion.rule === "none" ? "" : `complete: ${content.completion.rule}`,
+            `takes ${formatMinutes(content.durationMin)}`,
+            countOf(content.readings.length, "reading"),
+          ]
+            .filter(Boolean)
+            .join("; ")}
+        </span>
+        {risk ? <span className="block pt-1 hand:hidden">Risk {riskMark}</span> : null}
+      </RowHead>
+      <Cell className="max-hand:hidden">{content.order}</Cell>
+      <Cell className="whitespace-nowrap max-hand:hidden">{positions || "—"}</Cell>
+      <Cell className="max-hand:hidden">{content.parents.join(", ") || "—"}</Cell>
+      <Cell className="whitespace-nowrap max-hand:hidden">{content.completion.rule}</Cell>
+      <Cell figures className="max-hand:hidden">
+        {formatMinutes(content.durationMin)}
+      </Cell>
+      <Cell figures className="max-hand:hidden">
+        {content.readings.length}
+      </Cell>
+      <Cell className="max-hand:hidden">{riskMark}</Cell>
+    </Row>
   );
 }

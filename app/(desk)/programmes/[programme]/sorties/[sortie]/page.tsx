@@ -3,6 +3,7 @@ import { PrintSheet } from "@/components/builder/print-sheet";
 import { CardState } from "@/components/card/card-state";
 import { AnswerCard } from "@/components/sortie/answer-card";
 import { BriefForm } from "@/components/sortie/brief-form";
+import { CancelSortie } from "@/components/sortie/end-sortie";
 import { LoadingForm } from "@/components/sortie/loading-form";
 import { SortieStateBadge } from "@/components/sortie/sortie-state";
 import { buttonClass } from "@/components/ui/button";
@@ -10,7 +11,7 @@ import { Facts, PageHeader, Section } from "@/components/ui/page-header";
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatNumber } from "@/lib/format/number";
 import { formatDay, formatInstant } from "@/lib/format/time";
-import { countOf } from "@/lib/format/words";
+import { asSentences, countOf } from "@/lib/format/words";
 import { type LoadCase, planLoad } from "@/lib/testcards/card-plan";
 import { shortDigest } from "@/lib/workflow/card/policy";
 import { whoMay } from "@/lib/workflow/permissions";
@@ -38,21 +39,25 @@ export default async function SortiePage({ params }: Props) {
         badge={<SortieStateBadge state={sortie.state} />}
         lead={`${formatDay(sortie.plannedOn)}, planned by ${sortie.plannedByName}`}
         actions={
-          debrief ? (
-            <Link className={buttonClass("main")} href={`${here}/sorties/${id}/results`}>
-              Results
-            </Link>
-          ) : may.debrief && sortie.state !== "planned" ? (
-            <a className={buttonClass("outline")} href={`/debrief/${id}`}>
-              Debrief on the phone
-            </a>
-          ) : may.change ? (
-            <Link className={buttonClass("outline")} href={`${here}/sorties/${id}/change`}>
-              Change the sortie
-            </Link>
-          ) : null
+          <>
+            {debrief ? (
+              <Link className={buttonClass("main")} href={`${here}/sorties/${id}/results`}>
+                Results
+              </Link>
+            ) : may.debrief && sortie.state !== "planned" ? (
+              <a className={buttonClass("outline")} href={`/debrief/${id}`}>
+                Debrief on the phone
+              </a>
+            ) : may.change ? (
+              <Link className={buttonClass("outline")} href={`${here}/sorties/${id}/change`}>
+                Change the sortie
+              </Link>
+            ) : null}
+            {may.cancel ? <CancelSortie sortieId={id} number={sortie.number} version={sortie.version} /> : null}
+          </>
         }
       />
+      {sortie.state === "closed" ? <p className="pb-6">{closedWords(view)}</p> : null}
       <Section id="cards" title="Cards">
         <ol className="flex flex-col">
           {view.cards.map((card, index) => (
@@ -172,6 +177,12 @@ function Loading({ view: { crew, sortie, cards, plan } }: { view: SortieView }) 
       ))}
     </>
   );
+}
+
+/** A sortie closed without a debrief was cancelled: nothing of it was flown. */
+function closedWords({ sortie: { closedAt, closedByName, closedWhy }, debrief }: SortieView): string {
+  const when = `${debrief ? "Closed" : "Cancelled"}${closedAt ? ` ${formatInstant(closedAt)}` : ""}${closedByName ? ` by ${closedByName}` : ""}`;
+  return asSentences([when, ...(closedWhy ? [closedWhy] : []), ...(debrief ? [] : ["Every point was skipped"])]);
 }
 
 function loadWords(load: LoadCase | null): string {

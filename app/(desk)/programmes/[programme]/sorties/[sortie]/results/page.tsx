@@ -2,6 +2,7 @@ import Link from "next/link";
 import { CardResults } from "@/components/results/card-results";
 import { Dispositions } from "@/components/results/dispositions";
 import { RawDebrief } from "@/components/results/raw-debrief";
+import { CloseSortie } from "@/components/sortie/end-sortie";
 import { SortieStateBadge } from "@/components/sortie/sortie-state";
 import { Badge } from "@/components/ui/badge";
 import { PageHeader, Section } from "@/components/ui/page-header";
@@ -38,8 +39,15 @@ export default async function ResultsPage({ params, searchParams }: Props) {
               {sortie.kind}
             </Link>
             , debriefed by {debrief.submittedByName}, {formatInstant(debrief.submittedAt)}
+            {sortie.closedAt ? (
+              <>
+                . Closed by {sortie.closedByName}, {formatInstant(sortie.closedAt)}
+                {sortie.closedWhy ? `: ${sortie.closedWhy}` : ""}
+              </>
+            ) : null}
           </>
         }
+        actions={may.close && results.open.length === 0 ? <CloseSortie sortieId={id} number={sortie.number} /> : undefined}
       />
       <Follows results={results} programme={programme} />
       {checks.map(({ card, report, coreVersion, why, createdAt }) => (
@@ -90,6 +98,17 @@ export default async function ResultsPage({ params, searchParams }: Props) {
         </Section>
       ) : null}
       <StepSection results={results} programmeId={programme} roles={actor.roles} />
+      {may.close && results.open.length > 0 ? (
+        <Section id="closing" title="Before it can be closed">
+          <ul className="list-disc ps-5">
+            {results.open.map((line) => (
+              <li key={line} className="py-1">
+                {line}
+              </li>
+            ))}
+          </ul>
+        </Section>
+      ) : null}
       <Section id="raw" title="As it was typed" lead="The pilot’s raw readings, locked when they were sent.">
         <RawDebrief debrief={debrief.content} documents={checks.map(({ card }) => card.document)} />
       </Section>
@@ -130,7 +149,7 @@ function Follows({ results: { checks, squawks }, programme }: { results: SortieR
             <Badge tone={squawk.severity === "grounding" ? "red" : squawk.severity === "before next test" ? "yellow" : "plain"}>
               {squawk.severity}
             </Badge>{" "}
-            <Link className="underline underline-offset-4" href={`/programmes/${programme}/squawks`}>
+            <Link className="underline underline-offset-4" href={`/programmes/${programme}/squawks/${squawk.id}`}>
               Squawk {squawk.number}
             </Link>
             : {squawk.text}

@@ -319,4 +319,43 @@ describe("sorties", () => {
       raisedByName: "The pilot",
     });
   });
+
+  test("squawks go from state to state by POST on their transitions, each by the role whose step it is", async () => {
+    const squawks = await import("@/app/api/v1/programmes/[programme]/squawks/route");
+    const { POST } = await import("@/app/api/v1/squawks/[squawk]/transitions/route");
+    const raised = await call(
+      squawks.POST,
+      { programme: desk.programmeId },
+      { as: "pilot", body: { system: "Fuel", text: "weep", severity: "monitor" } },
+    );
+    const go = (as: Role, body: object) => call(POST, { squawk: raised.json.id }, { as, body });
+    expect((await go("engineer", { to: "flown" })).json.errors).toEqual([
+      { path: "to", message: "Say where to: assessed, dispositioned, verified or closed." },
+    ]);
+    expect((await go("engineer", { to: "dispositioned" })).status).toBe(422);
+    expect((await go("mechanic", { to: "closed" })).status).toBe(403);
+    expect((await go("mechanic", { to: "verified" })).status).toBe(409);
+    expect((await go("engineer", { to: "assessed", from: "open", severity: "monitor" })).json.state).toBe("assessed");
+    expect((await go("engineer", { to: "assessed", from: "open", severity: "monitor" })).status).toBe(412);
+    const work = { to: "dispositioned", disposition: "rectified", why: "union tightened", entryReference: "log 2, page 14" };
+    expect((await go("engineer", work)).status).toBe(403);
+    expect((await go("mechanic", { ...work, disposition: "accepted as is" })).status).toBe(403);
+    expect((await go("mechanic", work)).json).toMatchObject({ state: "dispositioned", disposition: "rectified" });
+    expect((await go("mechanic", { to: "verified" })).json.state).toBe("verified");
+    expect((await go("engineer", { to: "closed" })).json.state).toBe("closed");
+  });
+
+  test("are cancelled with the version that was seen and a reason, and not closed before a debrief", async () => {
+    const { sortieId } = plannedSortie(desk);
+    const { POST: cancel } = await import("@/app/api/v1/sorties/[sortie]/cancel/route");
+    const { POST: close } = await import("@/app/api/v1/sorties/[sortie]/close/route");
+    const sortie = { sortie: sortieId };
+    expect((await call(close, sortie, { body: {} })).status).toBe(409);
+    expect((await call(cancel, sortie, { body: { why: "wind" } })).status).toBe(428);
+    expect((await call(cancel, sortie, { body: { why: "wind" }, headers: { "if-match": '"9"' } })).status).toBe(412);
+    const empty = await call(cancel, sortie, { body: { why: " " }, headers: { "if-match": '"1"' } });
+    expect(empty.json.errors).toEqual([{ path: "why", message: "Say in one line why it is cancelled." }]);
+    const done = await call(cancel, sortie, { body: { why: "wind" }, headers: { "if-match": '"1"' } });
+    expect([done.status, done.json.state, done.headers.get("etag")]).toEqual([200, "closed", '"2"']);
+  });
 });

@@ -170,6 +170,9 @@ export function CardBuilder(props: CardBuilderProps) {
         <aside
           className={`border-rule bg-sheet p-4 wide:sticky wide:top-14 wide:block wide:max-h-[calc(100dvh-3.5rem)] wide:overflow-y-auto wide:border-e ${pane === "shelf" ? "" : "hidden"}`}
         >
+          <a href="#sheet" className="sr-only focus:not-sr-only focus:mb-2 focus:inline-block focus:underline">
+            Skip the shelf, go to the sheet
+          </a>
           <ShelfPanel
             shelf={shelf}
             hazards={programme.hazards}
@@ -178,7 +181,7 @@ export function CardBuilder(props: CardBuilderProps) {
             onPut={(template) => put(template, content.points.length)}
           />
         </aside>
-        <div className={`px-12 py-6 wide:block ${pane === "sheet" ? "" : "hidden"}`}>
+        <div id="sheet" tabIndex={-1} className={`px-12 py-6 wide:block ${pane === "sheet" ? "" : "hidden"}`}>
           <SheetWorkspace
             pages={pages}
             points={content.points}

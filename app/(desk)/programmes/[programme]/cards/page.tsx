@@ -66,9 +66,11 @@ export default async function CardsPage({ params, searchParams }: Props) {
             <HeadCell>Card</HeadCell>
             <HeadCell>Newest revision</HeadCell>
             <HeadCell>In force</HeadCell>
-            <HeadCell figures>Points</HeadCell>
-            <HeadCell>Planned</HeadCell>
-            <HeadCell>Author</HeadCell>
+            <HeadCell figures className="max-hand:hidden">
+              Points
+            </HeadCell>
+            <HeadCell className="max-hand:hidden">Planned</HeadCell>
+            <HeadCell className="max-hand:hidden">Author</HeadCell>
           </TableHead>
           <tbody>
             {cards.map((card) => (
@@ -90,11 +92,13 @@ export default async function CardsPage({ params, searchParams }: Props) {
                     <span className="text-ink-soft">none</span>
                   )}
                 </Cell>
-                <Cell figures>{card.points}</Cell>
-                <Cell className="whitespace-nowrap">
+                <Cell figures className="max-hand:hidden">
+                  {card.points}
+                </Cell>
+                <Cell className="whitespace-nowrap max-hand:hidden">
                   {card.plannedOn ? formatDay(card.plannedOn) : <span className="text-ink-soft">not set</span>}
                 </Cell>
-                <Cell>{card.authorName}</Cell>
+                <Cell className="max-hand:hidden">{card.authorName}</Cell>
               </Row>
             ))}
           </tbody>

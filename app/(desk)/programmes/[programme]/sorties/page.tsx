@@ -40,8 +40,8 @@ export default async function SortiesPage({ params }: { params: Promise<{ progra
             <HeadCell>Sortie</HeadCell>
             <HeadCell>Planned</HeadCell>
             <HeadCell>State</HeadCell>
-            <HeadCell>Cards</HeadCell>
-            <HeadCell>Pilot</HeadCell>
+            <HeadCell className="max-hand:hidden">Cards</HeadCell>
+            <HeadCell className="max-hand:hidden">Pilot</HeadCell>
             <HeadCell>Result</HeadCell>
           </TableHead>
           <tbody>
@@ -52,12 +52,12 @@ export default async function SortiesPage({ params }: { params: Promise<{ progra
                     {sortie.number} {sortie.kind}
                   </Link>
                 </RowHead>
-                <Cell className="whitespace-nowrap">{formatDay(sortie.plannedOn)}</Cell>
+                <Cell className="hand:whitespace-nowrap">{formatDay(sortie.plannedOn)}</Cell>
                 <Cell>
                   <SortieStateBadge state={sortie.state} />
                 </Cell>
-                <Cell>{sortie.cards}</Cell>
-                <Cell>{sortie.pilot ?? "—"}</Cell>
+                <Cell className="max-hand:hidden">{sortie.cards}</Cell>
+                <Cell className="max-hand:hidden">{sortie.pilot ?? "—"}</Cell>
                 <Cell>
                   {sortie.submittedAt ? (
                     <Link className="underline underline-offset-4" href={`${here}/${sortie.id}/results`}>

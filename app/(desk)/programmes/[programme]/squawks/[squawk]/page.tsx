@@ -119,7 +119,9 @@ function factsOf(squawk: SquawkListItem, programme: string) {
     ...(disposition ? [{ term: "Disposition", value: disposition }] : []),
     ...(dispositionLimit ? [{ term: "Limit", value: dispositionLimit }] : []),
     ...(entryReference ? [{ term: "Entry of the work", value: entryReference }] : []),
-    ...(verifiedReference ? [{ term: "Entry at verification", value: verifiedReference }] : []),
+    ...(verifiedReference
+      ? [{ term: squawk.severity === "grounding" ? "Licensed person's entry" : "Entry at verification", value: verifiedReference }]
+      : []),
   ];
 }
 

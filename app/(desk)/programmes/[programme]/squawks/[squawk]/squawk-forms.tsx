@@ -72,7 +72,14 @@ export function AssessForm({ action, severity, fixed, again }: FormProps & { sev
               </Select>
             )}
           </Field>
-          <Field id="assess-why" name="why" label="Why" hint="Needed where the severity changes." error={fieldErrors.why}>
+          <Field
+            id="assess-why"
+            name="why"
+            label="Why"
+            hint="Needed where the severity changes."
+            required={fieldErrors.why !== undefined}
+            error={fieldErrors.why}
+          >
             {(props) => <Textarea {...props} rows={2} maxLength={300} defaultValue={values.why} />}
           </Field>
         </>

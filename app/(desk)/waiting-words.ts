@@ -44,6 +44,13 @@ export function waitingLine(item: WaitingItem): WaitingLine {
         text: `${item.kind}, ${formatDay(item.plannedOn)}`,
         address: `/debrief/${item.sortieId}`,
       };
+    case "countersign step":
+      return {
+        key: item.stepId,
+        head: `Countersign “${item.decision}”`,
+        text: item.step,
+        address: `${base}/sorties/${item.sortieId}/results#steps`,
+      };
     case "sign configuration":
       return {
         key: item.configurationId,

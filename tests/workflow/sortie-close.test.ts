@@ -94,7 +94,11 @@ describe("closing a debriefed sortie", () => {
     expectRefused(desk, close, {
       details: { open: ["Card 01, Climb cooling: “smaller step” waits for a reviewer's countersignature."] },
     });
+    expect(listWaiting(desk.db, desk.as("reviewer").actor)).toMatchObject([
+      { what: "countersign step", stepId: id, decision: "smaller step" },
+    ]);
     countersignStep(desk.as("reviewer"), { stepId: id });
+    expect(listWaiting(desk.db, desk.as("reviewer").actor)).toEqual([]);
     expect(close()).toMatchObject({ state: "closed" });
   });
 

@@ -1,9 +1,20 @@
-import { and, asc, eq, inArray, isNull, ne, sql } from "drizzle-orm";
+import { and, asc, eq, gt, inArray, isNull, ne, notExists, sql } from "drizzle-orm";
+import { alias } from "drizzle-orm/sqlite-core";
 import type { Db, Tx } from "@/db/open";
-import { cardRevisions, cards, configurations, programmes, reviewComments, sortieCards, sorties, squawks } from "@/db/schema";
+import {
+  cardRevisions,
+  cards,
+  configurations,
+  programmes,
+  reviewComments,
+  sortieCards,
+  sorties,
+  squawks,
+  stepDecisions,
+} from "@/db/schema";
 import type { Actor } from "@/lib/auth/roles";
 import { hasRole } from "@/lib/auth/roles";
-import type { SortieKind, SquawkSeverity } from "@/lib/testcards/words";
+import type { SortieKind, SquawkSeverity, StepDecision } from "@/lib/testcards/words";
 import { wroteIt } from "../card/policy";
 import { may } from "../permissions";
 import { NEXT, type SquawkAct } from "../squawk/policy";
@@ -25,6 +36,7 @@ export type WaitingItem =
   | ({ what: "debrief sortie" } & SortieWaiting)
   | ({ what: "review results" } & SortieWaiting)
   | ({ what: "close sortie" } & SortieWaiting)
+  | ({ what: "countersign step" } & InProgramme & { stepId: string; step: string; decision: StepDecision; sortieId: string })
   | ({ what: "sign configuration" } & InProgramme & { configurationId: string; number: string })
   | ({ what: "open squawk" } & InProgramme & {
         squawkId: string;
@@ -41,6 +53,7 @@ export function listWaiting(db: Reader, actor: Actor): WaitingItem[] {
   return [
     ...(hasRole(actor, ["engineer", "reviewer"]) ? waitingCards(db, actor) : []),
     ...(hasRole(actor, ["pilot", "engineer"]) ? waitingSorties(db, actor) : []),
+    ...(may(actor, "countersign a step") ? proposedSteps(db, actor) : []),
     ...(hasRole(actor, ["mechanic"]) ? unsignedConfigurations(db, actor) : []),
     ...(hasRole(actor, ["mechanic", "engineer"]) ? openSquawks(db, actor) : []),
   ];
@@ -104,6 +117,41 @@ function waitingSorties(db: Reader, actor: Actor): WaitingItem[] {
     if (state !== "planned") return [{ what: "debrief sortie", ...sortie }];
     return unanswered > 0 ? [{ what: "answer cards", unanswered, ...sortie }] : [{ what: "brief sortie", ...sortie }];
   });
+}
+
+/** Proposals of others that nothing newer replaced; a hold needs nobody. */
+function proposedSteps(db: Reader, actor: Actor): WaitingItem[] {
+  const newer = alias(stepDecisions, "newer");
+  const replaced = db
+    .select({ id: newer.id })
+    .from(newer)
+    .where(and(eq(newer.sortieId, stepDecisions.sortieId), eq(newer.step, stepDecisions.step), gt(newer.position, stepDecisions.position)));
+  return db
+    .select({
+      programmeId: programmes.id,
+      programmeName: programmes.name,
+      stepId: stepDecisions.id,
+      step: stepDecisions.step,
+      decision: stepDecisions.decision,
+      sortieId: sorties.id,
+    })
+    .from(stepDecisions)
+    .innerJoin(sorties, eq(sorties.id, stepDecisions.sortieId))
+    .innerJoin(programmes, eq(programmes.id, stepDecisions.programmeId))
+    .where(
+      and(
+        eq(programmes.teamId, actor.teamId),
+        eq(sorties.state, "debriefed"),
+        eq(stepDecisions.origin, "flown"),
+        isNull(stepDecisions.countersignedAt),
+        ne(stepDecisions.decision, "hold"),
+        ne(stepDecisions.proposedBy, actor.id),
+        notExists(replaced),
+      ),
+    )
+    .orderBy(asc(stepDecisions.position))
+    .all()
+    .map((row) => ({ what: "countersign step", ...row }));
 }
 
 function unsignedConfigurations(db: Reader, actor: Actor): WaitingItem[] {

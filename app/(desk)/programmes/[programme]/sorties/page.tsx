@@ -8,7 +8,7 @@ import { Cell, HeadCell, Row, RowHead, Table, TableHead } from "@/components/ui/
 import { requestCtx } from "@/lib/auth/request-ctx";
 import { formatDay } from "@/lib/format/time";
 import { may } from "@/lib/workflow/permissions";
-import { listSorties } from "@/lib/workflow/sortie/queries";
+import { listSorties, type SortieListItem } from "@/lib/workflow/sortie/queries";
 import { BinderPage } from "../binder-page";
 
 export const metadata = { title: "Sorties" };
@@ -64,7 +64,7 @@ export default async function SortiesPage({ params }: { params: Promise<{ progra
                       Results
                     </Link>
                   ) : (
-                    <span className="text-ink-soft">{sortie.unanswered > 0 ? `${sortie.unanswered} to accept` : "not flown"}</span>
+                    <span className="text-ink-soft">{notFlown(sortie)}</span>
                   )}
                 </Cell>
               </Row>
@@ -74,4 +74,9 @@ export default async function SortiesPage({ params }: { params: Promise<{ progra
       )}
     </BinderPage>
   );
+}
+
+function notFlown({ state, unanswered }: SortieListItem): string {
+  if (state === "closed") return "cancelled";
+  return unanswered > 0 ? `${unanswered} to accept` : "not flown";
 }

@@ -10,6 +10,7 @@ import { may, whoMay } from "@/lib/workflow/permissions";
 import { listSorties } from "@/lib/workflow/sortie/queries";
 import { listSquawks, type SquawkListItem } from "@/lib/workflow/squawk/queries";
 import { orNotFound } from "../../../or-not-found";
+import { BinderPage } from "../binder-page";
 import { raiseSquawkAction } from "./actions";
 import { RaiseSquawkForm } from "./raise-squawk-form";
 import { SeverityMark } from "./severity-mark";
@@ -28,7 +29,7 @@ export default async function SquawksPage({ params }: { params: Promise<{ progra
     label: `Sortie ${number}, ${kind}, ${formatDay(plannedOn)}`,
   }));
   return (
-    <main className="mx-auto w-full max-w-6xl grow px-4 py-8 desk:px-6">
+    <BinderPage>
       <PageHeader
         title="Squawks"
         lead={
@@ -56,7 +57,7 @@ export default async function SquawksPage({ params }: { params: Promise<{ progra
           )}
         </Section>
       </div>
-    </main>
+    </BinderPage>
   );
 }
 
@@ -88,7 +89,7 @@ function SquawkLine({ squawk, programmeId }: { squawk: SquawkListItem; programme
       <Cell figures>{squawk.number}</Cell>
       <Cell className="max-hand:hidden">{severity}</Cell>
       <RowHead className="hand:min-w-64">
-        <Link href={`/programmes/${programmeId}/squawks/${squawk.id}`} className="link inline-block py-1 [overflow-wrap:anywhere]">
+        <Link href={`/programmes/${programmeId}/squawks/${squawk.id}`} className="link py-1 [overflow-wrap:anywhere]">
           <span className="font-bold">{squawk.system}</span> {squawk.text}
         </Link>
         <span className="block pt-1 hand:hidden">{severity}</span>

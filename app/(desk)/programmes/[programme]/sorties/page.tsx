@@ -48,7 +48,7 @@ export default async function SortiesPage({ params }: { params: Promise<{ progra
             {sorties.map((sortie) => (
               <Row key={sortie.id}>
                 <RowHead>
-                  <Link className="inline-block min-h-6 font-bold underline-offset-4 hover:underline" href={`${here}/${sortie.id}`}>
+                  <Link className="py-1 font-bold underline-offset-4 hover:underline" href={`${here}/${sortie.id}`}>
                     {sortie.number} {sortie.kind}
                   </Link>
                 </RowHead>

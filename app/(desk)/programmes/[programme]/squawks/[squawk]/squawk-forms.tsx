@@ -158,6 +158,7 @@ export function AcceptForm({ action }: FormProps) {
             name="limit"
             label="Limit"
             hint="Of a deferred one: until when, or within what, it is flown."
+            required={state.fieldErrors.limit !== undefined}
             error={state.fieldErrors.limit}
           >
             {(props) => <Input {...props} maxLength={200} defaultValue={state.values.limit} />}

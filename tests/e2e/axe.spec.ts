@@ -58,10 +58,24 @@ test("nothing serious on the programme's pages", async ({ page, signInAs, server
   test.setTimeout(300_000);
   consoleWatch.allow(/status of 404/);
   await signInAs("engineer");
-  const programme = `/programmes/${await programmeOf(apiOf(page, server.url))}`;
+  const api = apiOf(page, server.url);
+  const programme = `/programmes/${await programmeOf(api)}`;
+  const squawk = await api.post(`${programme}/squawks`, { system: "cooling", text: "Weeping hose.", severity: "monitor" });
+  const planned = (await sortiesOf(api)).find(({ state }) => state === "planned");
   const places = ["/", "/team", "/account", "/nowhere", programme];
-  const parts = ["limits", "test-points", "test-points/T10", "cards", "cards/new", "sorties", "sorties/new", "squawks", "ladder"];
-  for (const address of [...places, ...parts.map((part) => `${programme}/${part}`)]) {
+  const parts = [
+    "limits",
+    "test-points",
+    "test-points/T10",
+    "cards",
+    "cards/new",
+    "sorties",
+    "sorties/new",
+    "squawks",
+    "ladder",
+    `squawks/${squawk.body.id}`,
+  ];
+  for (const address of [...places, ...parts.map((part) => `${programme}/${part}`), `${planned?.address}/change`]) {
     await everyHeading(page, address);
     await expectClean(page, address);
   }

@@ -89,7 +89,7 @@ export function ShelfPanel({ shelf, hazards, parameters, onCard, onPut }: ShelfP
           </label>
         ))}
       </fieldset>
-      <div className="mt-2 grid grid-cols-2 gap-2">
+      <div className="mt-2 grid grid-cols-[2fr_3fr] gap-2">
         <Select aria-label="Residual risk" value={risk} onChange={(event) => setRisk(event.target.value as RiskLevel | "all")}>
           <option value="all">Any risk</option>
           {RISK_LEVELS.filter((level) => level !== "Eliminated").map((level) => (

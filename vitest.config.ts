@@ -14,6 +14,7 @@ export default defineConfig({
     include: ["tests/**/*.test.ts", "tests/**/*.test.tsx"],
     exclude: ["tests/e2e/**", "node_modules/**"],
     environment: "node",
+    setupFiles: ["tests/support/property-seed.ts"],
     restoreMocks: true,
     testTimeout: 20_000,
     hookTimeout: 60_000,

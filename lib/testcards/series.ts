@@ -14,7 +14,8 @@ export function checkSeries(series: readonly Sample[], least = 1): void {
   for (const { timeS, value } of series) {
     checkFinite("series.timeS", timeS);
     checkFinite("series.value", value);
-    if (previous !== undefined && timeS < previous + SHORTEST_STEP_S)
+    if (previous !== undefined && timeS - previous < SHORTEST_STEP_S)
+      // a difference: on a huge time the sum would round the step away
       throw new RangeError(`series.timeS goes from ${previous} to ${timeS}; times must rise.`);
     previous = timeS;
   }

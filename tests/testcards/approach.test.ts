@@ -57,6 +57,13 @@ describe("fitApproach", () => {
     expect(fitApproach(line, { initial: 80 }).converged).toBe(false);
   });
 
+  // Two equal times so late that adding the shortest step to the first rounds the step away: not rising, so refused, never searched.
+  test("refuses equal times however late they are", () => {
+    const late = 264_695_657_063.48483;
+    const series = [72_357, 72_505, late, late, late + 107_627].map((timeS, i) => ({ timeS, value: i }));
+    expect(() => fitApproach(series, { initial: 119_990 })).toThrow("times must rise");
+  });
+
   test("refuses too few readings, no change, times before the start and figures that are none", () => {
     expect(() => fitApproach(rise(times.slice(0, 3), 60, 95, 180))).toThrow(/at least 4/);
     expect(() => fitApproach(times.map((timeS) => ({ timeS, value: 90 })))).toThrow(RangeError);

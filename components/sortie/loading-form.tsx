@@ -10,11 +10,10 @@ import { callApi } from "@/components/live/call-api";
 import { Button } from "@/components/ui/button";
 import { Input } from "@/components/ui/input";
 import { EnterLoadingInput } from "@/lib/workflow/sortie/schema";
+import { asNumber, DAY_PLAN } from "./loading-words";
 
 type Typed = z.input<typeof EnterLoadingInput>;
 type Loading = z.output<typeof EnterLoadingInput>;
-const asNumber = (value: unknown) => (value === "" || value === null || value === undefined ? null : Number(value));
-const DAY_PLAN = { daylight: "Daylight", dutyTime: "Duty time", runway: "Runway and its state" } as const;
 
 /** Fuel, baggage, forecast and the day's plan, by the pilot who flies; a briefed sortie is then briefed again. */
 export function LoadingForm({

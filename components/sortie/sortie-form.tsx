@@ -13,6 +13,7 @@ import { Input } from "@/components/ui/input";
 import { Select } from "@/components/ui/select";
 import { type CardState, SORTIE_KINDS, type SortieKind } from "@/lib/testcards/words";
 import { PlanSortieInput } from "@/lib/workflow/sortie/schema";
+import { asNumber, DAY_PLAN } from "./loading-words";
 
 type Offered = {
   id: string;
@@ -34,7 +35,6 @@ type SortieFormProps = {
 
 type Typed = z.input<typeof PlanSortieInput>;
 type Plan = z.output<typeof PlanSortieInput>;
-const asNumber = (value: unknown) => (value === "" || value === null || value === undefined ? null : Number(value));
 
 /** Kind, day, crew, configuration and cards, by the same schema as the server's. */
 export function SortieForm({ programmeId, today, cards, configurations, pilots, planned }: SortieFormProps) {
@@ -238,5 +238,3 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots, 
     </form>
   );
 }
-
-const DAY_PLAN = { daylight: "Daylight", dutyTime: "Duty time", runway: "Runway and its state" };

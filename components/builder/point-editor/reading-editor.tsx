@@ -14,6 +14,17 @@ const BY = [
   { value: "observer", label: "Observer" },
 ] as const;
 
+/** What a reading does not say until somebody writes it. */
+const UNSAID = {
+  conditions: [],
+  expected: null,
+  expectedOrigin: null,
+  expectedRatePerMin: null,
+  choices: [],
+  low: null,
+  high: null,
+} satisfies Partial<Reading>;
+
 /** What is read, on which gauge, by whom, and what is expected. The unit is always the gauge's own. */
 export function ReadingEditor(props: PointPartProps) {
   const { card, point, change, newId } = props;
@@ -43,13 +54,7 @@ export function ReadingEditor(props: PointPartProps) {
             recordedBy: instrument.visibleTo.includes("pilot") ? "pilot" : "observer",
             onSheet: point.grid ? "grid" : "single",
             sampling: "highest",
-            conditions: [],
-            expected: null,
-            expectedOrigin: null,
-            expectedRatePerMin: null,
-            choices: [],
-            low: null,
-            high: null,
+            ...UNSAID,
           },
         ],
         "reading added",
@@ -139,13 +144,7 @@ export function ReadingEditor(props: PointPartProps) {
                 recordedBy: "pilot",
                 onSheet: "single",
                 sampling: "single",
-                conditions: [],
-                expected: null,
-                expectedOrigin: null,
-                expectedRatePerMin: null,
-                choices: [],
-                low: null,
-                high: null,
+                ...UNSAID,
               },
             ],
             "question added",

@@ -78,7 +78,7 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots, 
     for (const { path, message } of answer.problem.errors) setError(path as "kind", { message });
   });
 
-  /** The first card ticked says what it was planned with; what was typed already stays. */
+  /** The first card ticked says what it was planned with; what was typed already stays. All cards share one field: the event names the card. */
   const takeLoading = (revisionId: string, on: boolean) => {
     const loading = cards.find((card) => card.revisionId === revisionId)?.loading;
     const { crew: people, settings } = getValues();
@@ -131,7 +131,7 @@ export function SortieForm({ programmeId, today, cards, configurations, pilots, 
             <input
               type="checkbox"
               value={revisionId}
-              {...register("revisionIds", { onChange: (event) => takeLoading(revisionId, event.target.checked) })}
+              {...register("revisionIds", { onChange: (event) => takeLoading(event.target.value, event.target.checked) })}
               className="size-5 accent-spine"
             />
             <span className="grow">

@@ -213,11 +213,11 @@ async function planSortie(page: Page, number: string): Promise<string> {
   await page.getByRole("link", { name: "Plan a sortie" }).click();
   await page.getByLabel("Kind").selectOption("flight");
   await page.getByRole("checkbox", { name: new RegExp(`^Card ${number} Climb at 85 kt, rev A`) }).check();
-  await page.getByLabel("Mass, kg").fill(MASS_KG.pilot);
-  await page.getByRole("button", { name: "Add an observer" }).click();
+  // crew and fuel come from the card that was ticked
+  await expect(page.getByLabel("Mass, kg").first()).toHaveValue(MASS_KG.pilot);
+  await expect(page.getByLabel("Mass, kg").last()).toHaveValue(MASS_KG.observer);
+  await expect(page.getByLabel("Fuel on board, L")).toHaveValue("60");
   await page.getByLabel("Name").fill("A. Observer");
-  await page.getByLabel("Mass, kg").last().fill(MASS_KG.observer);
-  await page.getByLabel("Fuel on board, L").fill("60");
   await page.getByLabel("Forecast outside air, °C").fill("24");
   await page.getByLabel("Daylight").fill("landing an hour before sunset");
   await page.getByLabel("Duty time").fill("07:00 to 15:00");
